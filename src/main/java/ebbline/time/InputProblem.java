@@ -1,0 +1,40 @@
+package ebbline.time;
+
+import java.util.Objects;
+
+/**
+ * One thing wrong with what the user gave: where it stands, what was found, what was expected.
+ *
+ * <p>Readers collect all problems of an input and report them together, in the order of the file.
+ *
+ * @param source file path as the user gave it, or the name of an option
+ * @param line line of the file, counted from 1; 0 where lines mean nothing
+ * @param column column name (CSV), member path (JSON) or character position; empty where unknown
+ * @param value the offending text; empty where nothing was found
+ * @param expected what is wrong and how to mend it, one sentence without the place
+ */
+public record InputProblem(String source, int line, String column, String value, String expected) {
+
+  public InputProblem {
+    Objects.requireNonNull(source, "source");
+    Objects.requireNonNull(column, "column");
+    Objects.requireNonNull(value, "value");
+    Objects.requireNonNull(expected, "expected");
+  }
+
+  /** The problem as one line, {@code file:line: column 'x': found 'y': expected …}. */
+  public String message() {
+    StringBuilder text = new StringBuilder(source);
+    if (line > 0) {
+      text.append(':').append(line);
+    }
+    text.append(": ");
+    if (!column.isEmpty()) {
+      text.append("column '").append(column).append("': ");
+    }
+    if (!value.isEmpty()) {
+      text.append("found '").append(value).append("': ");
+    }
+    return text.append(expected).toString();
+  }
+}

@@ -1,0 +1,37 @@
+package ebbline.time;
+
+import java.time.DateTimeException;
+import java.time.LocalDate;
+import java.util.regex.Pattern;
+
+/** The written forms of a moment. */
+final class MomentText {
+  static final String EXPECTED =
+      "a date 2031-11-15, a tenor such as 3M, 10Y or 1Y6M, or a number of years such as 0.25";
+  private static final Pattern DATE = Pattern.compile("\\d{4}-\\d{2}-\\d{2}");
+  private static final Pattern NUMBER =
+      Pattern.compile("[+-]?(\\d+(\\.\\d*)?|\\.\\d+)([eE][+-]?\\d+)?");
+
+  private MomentText() {}
+
+  static Moment parse(String text) {
+    String t = text.strip();
+    if (DATE.matcher(t).matches()) {
+      try {
+        return Moment.of(LocalDate.parse(t));
+      } catch (DateTimeException e) {
+        throw new IllegalArgumentException("no such day in the calendar", e);
+      }
+    }
+    if (NUMBER.matcher(t).matches()) {
+      double years = Double.parseDouble(t);
+      if (Double.isFinite(years)) {
+        return Moment.ofYears(years);
+      }
+    }
+    if (Tenor.isTenor(t)) {
+      return Moment.of(Tenor.parse(t));
+    }
+    throw new IllegalArgumentException("expected " + EXPECTED);
+  }
+}

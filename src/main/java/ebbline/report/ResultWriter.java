@@ -1,0 +1,26 @@
+package ebbline.report;
+
+import java.io.IOException;
+import java.io.Writer;
+import java.util.List;
+
+/** Writes results one after another: {@code begin}, any number of {@code row}, {@code end}. */
+public interface ResultWriter {
+
+  void begin(Envelope envelope) throws IOException;
+
+  void row(ResultRow row) throws IOException;
+
+  /**
+   * @param warnings said in the JSON object; the other formats leave them to standard error
+   */
+  void end(List<String> warnings) throws IOException;
+
+  static ResultWriter of(OutputFormat format, Writer out) {
+    return switch (format) {
+      case TABLE -> new TableWriter(out);
+      case CSV -> new CsvWriter(out);
+      case JSON -> new JsonWriter(out);
+    };
+  }
+}

@@ -11,15 +11,16 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 
-/** A reference table of this package; refuses a file that does not name its source and maker. */
-final class ReferenceCsv {
+/** A reference table of these packages; refuses a file that does not name its source and maker. */
+public final class ReferenceCsv {
   private final Map<String, String> settings = new LinkedHashMap<>();
   private final List<String> header = new ArrayList<>();
   private final List<String[]> rows = new ArrayList<>();
 
   private ReferenceCsv() {}
 
-  static ReferenceCsv read(String name) {
+  /** Reads a resource beside this class. */
+  public static ReferenceCsv read(String name) {
     ReferenceCsv table = new ReferenceCsv();
     try (BufferedReader in =
         new BufferedReader(
@@ -48,16 +49,16 @@ final class ReferenceCsv {
     return table;
   }
 
-  double tolerance(String name) {
+  public double tolerance(String name) {
     return Double.parseDouble(
         Objects.requireNonNull(settings.get("tolerance." + name), "no tolerance." + name));
   }
 
-  int size() {
+  public int size() {
     return rows.size();
   }
 
-  String text(int row, String column) {
+  public String text(int row, String column) {
     int j = header.indexOf(column);
     if (j < 0) {
       throw new IllegalArgumentException("no column " + column + " among " + header);
@@ -65,12 +66,12 @@ final class ReferenceCsv {
     return rows.get(row)[j];
   }
 
-  double number(int row, String column) {
+  public double number(int row, String column) {
     return Double.parseDouble(text(row, column));
   }
 
   /** A column as numbers; an empty cell is NaN. */
-  double[] column(String column) {
+  public double[] column(String column) {
     double[] values = new double[rows.size()];
     for (int i = 0; i < values.length; i++) {
       String cell = text(i, column);

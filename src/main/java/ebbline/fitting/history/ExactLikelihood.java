@@ -1,0 +1,179 @@
+package ebbline.fitting.history;
+
+/**
+ * The exact Gaussian likelihood of a history, even or uneven, as a function of κ alone: for a given
+ * κ the best drift and variance solve in closed form.
+ *
+ * <p>Holds the drift at the first rate, m = κ(θ − x₀), rather than θ, which has no limit as κ → 0.
+ * Domain: κ ≥ 0; κ &gt; 0 where the first rate counts as drawn from the stationary law.
+ */
+final class ExactLikelihood {
+  private final double[] x;
+  private final double[] steps;
+  private final boolean stationary;
+
+  /** The point last evaluated. */
+  double meanReversion;
+
+  /** κ(θ − x₀), per year². */
+  double driftAtFirst;
+
+  /** σ². */
+  double variance;
+
+  double logLikelihood;
+
+  /** Of the profile, which is the partial one at the best drift and variance. */
+  double slope;
+
+  ExactLikelihood(RateHistory history, boolean stationary) {
+    this.x = history.ratesInPlace();
+    this.stationary = stationary;
+    this.steps = new double[x.length - 1];
+    for (int i = 0; i < steps.length; i++) {
+      steps[i] = history.isRegular() ? history.step() : history.time(i + 1) - history.time(i);
+    }
+  }
+
+  /** Densities that are multiplied: transitions, and the first rate where it counts. */
+  int terms() {
+    return steps.length + (stationary ? 1 : 0);
+  }
+
+  /** Evaluates the profile at κ. */
+  void at(double kappa) {
+    meanReversion = kappa;
+    // Residual of a step: e = δ + κ gΔ x − m gΔ with variance w = Δ g(2κΔ), g as in Decay; x is
+    // measured from the first rate, so that the drift is the one there.
+    double origin = x[0];
+    double num = 0;
+    double den = 0;
+    if (stationary) {
+      // (x₀ − θ)² 2κ = 2m²/κ.
+      den += 2 / kappa;
+    }
+    double last = -1;
+    double reach = 0;
+    double width = 0;
+    for (int i = 0; i < steps.length; i++) {
+      double step = steps[i];
+      if (step != last) {
+        reach = Decay.at(kappa * step).g * step;
+        width = Decay.at(2 * kappa * step).g * step;
+        last = step;
+      }
+      double gap = x[i + 1] - x[i] + kappa * reach * (x[i] - origin);
+      num += gap * reach / width;
+      den += reach * reach / width;
+    }
+    double m = num / den;
+    double squares = stationary ? 2 * m * m / kappa : 0;
+    double logs = stationary ? -Math.log(2 * kappa) : 0;
+    double logsSlope = stationary ? -1 / kappa : 0;
+    // At the best drift the slope is the same whether θ or m is held; with m nothing divides by κ.
+    double squaresSlope = stationary ? -2 * m * m / (kappa * kappa) : 0;
+    last = -1;
+    double reachSlope = 0;
+    double widthSlope = 0;
+    double logWidth = 0;
+    for (int i = 0; i < steps.length; i++) {
+      double step = steps[i];
+      if (step != last) {
+        Decay one = Decay.at(kappa * step);
+        Decay two = Decay.at(2 * kappa * step);
+        reach = one.g * step;
+        reachSlope = one.slope * step * step;
+        width = two.g * step;
+        widthSlope = 2 * two.slope * step * step;
+        logWidth = Math.log(width);
+        last = step;
+      }
+      double d = x[i] - origin;
+      double e = x[i + 1] - x[i] + kappa * reach * d - m * reach;
+      double eSlope = (reach + kappa * reachSlope) * d - m * reachSlope;
+      squares += e * e / width;
+      squaresSlope += (2 * e * eSlope - e * e * widthSlope / width) / width;
+      logs += logWidth;
+      logsSlope += widthSlope / width;
+    }
+    int n = terms();
+    driftAtFirst = m;
+    variance = squares / n;
+    logLikelihood = -0.5 * (n * (Math.log(2 * Math.PI * variance) + 1) + logs);
+    slope = -0.5 * (squaresSlope / variance + logsSlope);
+  }
+
+  /** The log-likelihood of a given law, with its constants. */
+  double logLikelihood(RateLaw law) {
+    double kappa = law.meanReversion();
+    double v = law.volatility() * law.volatility();
+    double sum = 0;
+    if (stationary) {
+      double d = x[0] - law.longRunMean();
+      sum += 2 * kappa * d * d / v - Math.log(2 * kappa);
+    }
+    for (int i = 0; i < steps.length; i++) {
+      double w = Decay.at(2 * kappa * steps[i]).g * steps[i];
+      double e = x[i + 1] - x[i] - Math.expm1(-kappa * steps[i]) * (x[i] - law.longRunMean());
+      sum += e * e / (v * w) + Math.log(w);
+    }
+    return -0.5 * (terms() * Math.log(2 * Math.PI * v) + sum);
+  }
+
+  double longRunMean() {
+    return x[0] + driftAtFirst / meanReversion;
+  }
+
+  /** Minus the second derivatives of the log-likelihood in (κ, θ, σ) at the maximum. */
+  double[][] information() {
+    double kappa = meanReversion;
+    double theta = longRunMean();
+    double v = variance;
+    double kk = 0;
+    double kt = 0;
+    double tt = 0;
+    double ks = 0;
+    if (stationary) {
+      double e = x[0] - theta;
+      double w = 1 / (2 * kappa);
+      double w1 = -w / kappa;
+      double w2 = 1 / (kappa * kappa * kappa);
+      kk += w2 / w - w1 * w1 / (w * w) + (2 * w1 * w1 / w - w2) * e * e / (v * w * w);
+      kt += 2 * (e * w1) / (v * w * w);
+      tt += 1 / (v * w);
+      ks += -e * e * w1 / (w * w);
+    }
+    for (int i = 0; i < steps.length; i++) {
+      double step = steps[i];
+      Decay two = Decay.at(2 * kappa * step);
+      double decay = Math.exp(-kappa * step);
+      double w = two.g * step;
+      double w1 = 2 * two.slope * step * step;
+      double w2 = 4 * two.bend * step * step * step;
+      double moved = -Math.expm1(-kappa * step);
+      double d = x[i] - theta;
+      double e = x[i + 1] - x[i] + moved * d;
+      double e1 = step * decay * d;
+      double e2 = -step * step * decay * d;
+      // Halves of ∂²/∂κ² etc. of log w + e²/(v w), doubled in the end by the ½ of the likelihood.
+      kk +=
+          w2 / w
+              - w1 * w1 / (w * w)
+              + (2 * (e1 * e1 + e * e2) / w
+                      - 4 * e * e1 * w1 / (w * w)
+                      - e * e * w2 / (w * w)
+                      + 2 * e * e * w1 * w1 / (w * w * w))
+                  / v;
+      kt += 2 * ((-e1 * moved - e * step * decay) / w + e * moved * w1 / (w * w)) / v;
+      tt += moved * moved / (v * w);
+      ks += 2 * e * e1 / w - e * e * w1 / (w * w);
+    }
+    double sigma = Math.sqrt(v);
+    double crossSigma = -ks / (v * sigma);
+    return new double[][] {
+      {0.5 * kk, 0.5 * kt, crossSigma},
+      {0.5 * kt, tt, 0},
+      {crossSigma, 0, 2 * terms() / v}
+    };
+  }
+}

@@ -120,6 +120,20 @@ final class ExactLikelihood {
     return -0.5 * (terms() * Math.log(2 * Math.PI * v) + sum);
   }
 
+  /** The log-likelihood of κ ≥ 0 and θ at the variance that suits them best. */
+  double logLikelihood(double kappa, double theta) {
+    double squares = 0;
+    double logs = 0;
+    for (int i = 0; i < steps.length; i++) {
+      double w = Decay.at(2 * kappa * steps[i]).g * steps[i];
+      double e = x[i + 1] - x[i] - Math.expm1(-kappa * steps[i]) * (x[i] - theta);
+      squares += e * e / w;
+      logs += Math.log(w);
+    }
+    int n = steps.length;
+    return -0.5 * (n * (Math.log(2 * Math.PI * squares / n) + 1) + logs);
+  }
+
   double longRunMean() {
     return x[0] + driftAtFirst / meanReversion;
   }

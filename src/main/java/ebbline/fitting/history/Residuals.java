@@ -1,0 +1,16 @@
+package ebbline.fitting.history;
+
+/** Residuals of a history under a law, each over its standard deviation. */
+final class Residuals {
+  private Residuals() {}
+
+  static double[] of(RateHistory history, RateLaw law) {
+    double[] residuals = new double[history.size() - 1];
+    for (int i = 0; i < residuals.length; i++) {
+      double step = history.isRegular() ? history.step() : history.time(i + 1) - history.time(i);
+      RateLaw.Normal next = law.conditional(history.rate(i), step);
+      residuals[i] = (history.rate(i + 1) - next.mean()) / next.sd();
+    }
+    return residuals;
+  }
+}

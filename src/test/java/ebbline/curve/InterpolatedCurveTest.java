@@ -1,0 +1,211 @@
+package ebbline.curve;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
+
+import java.util.Random;
+import org.apache.commons.math3.analysis.integration.gauss.GaussIntegrator;
+import org.apache.commons.math3.analysis.integration.gauss.GaussIntegratorFactory;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+
+class InterpolatedCurveTest {
+  private static final GaussIntegrator GAUSS = new GaussIntegratorFactory().legendre(8);
+
+  /** Nodes at random times; forwards between them uniform in the given range. */
+  private static InterpolatedCurve random(
+      Interpolation interpolation, Random random, double lowest, double highest) {
+    int n = 1 + random.nextInt(30);
+    double[] times = new double[n];
+    double[] logs = new double[n];
+    double t = 0;
+    double log = 0;
+    for (int i = 0; i < n; i++) {
+      double step = 0.05 + 2 * random.nextDouble();
+      log -= step * (lowest + (highest - lowest) * random.nextDouble());
+      t += step;
+      times[i] = t;
+      logs[i] = log;
+    }
+    return InterpolatedCurve.of(interpolation, times, logs);
+  }
+
+  @ParameterizedTest
+  @EnumSource(Interpolation.class)
+  void nodesAreMetToTheLastBit(Interpolation interpolation) {
+    Random random = new Random(1);
+    for (int i = 0; i < 200; i++) {
+      InterpolatedCurve curve = random(interpolation, random, -0.02, 0.08);
+      double[] times = curve.nodes();
+      double[] logs = curve.nodeLogDiscounts();
+      for (int k = 0; k < times.length; k++) {
+        assertThat(curve.logDiscount(times[k])).isEqualTo(logs[k]);
+      }
+      assertThat(curve.logDiscount(0)).isZero();
+      assertThat(curve.discount(0)).isEqualTo(1);
+    }
+  }
+
+  @ParameterizedTest
+  @EnumSource(Interpolation.class)
+  void theForwardIsTheSlopeOfTheLogDiscount(Interpolation interpolation) {
+    Random random = new Random(2);
+    double worst = 0;
+    for (int i = 0; i < 200; i++) {
+      InterpolatedCurve curve = random(interpolation, random, -0.02, 0.08);
+      double[] breaks = curve.breaks();
+      for (int k = 0; k < breaks.length; k++) {
+        double from = breaks[k];
+        double to = k + 1 < breaks.length ? breaks[k + 1] : from + 10;
+        double sum = 0;
+        double slopes = 0;
+        for (int p = 0; p < GAUSS.getNumberOfPoints(); p++) {
+          double t = from + 0.5 * (to - from) * (1 + GAUSS.getPoint(p));
+          sum += 0.5 * (to - from) * GAUSS.getWeight(p) * curve.forward(t);
+          slopes += 0.5 * (to - from) * GAUSS.getWeight(p) * curve.forwardSlope(t);
+        }
+        double change = curve.logDiscount(from) - curve.logDiscount(to);
+        worst = Math.max(worst, Math.abs(sum - change));
+        double end = to - 1e-12 * (to - from);
+        assertThat(slopes).isCloseTo(curve.forward(end) - curve.forward(from), within(1e-11));
+      }
+    }
+    assertThat(worst).isLessThan(1e-14);
+  }
+
+  @ParameterizedTest
+  @EnumSource(Interpolation.class)
+  void sensitivitiesToTheNodesAgreeWithFiniteDifferences(Interpolation interpolation) {
+    Random random = new Random(3);
+    for (int i = 0; i < 100; i++) {
+      InterpolatedCurve curve = random(interpolation, random, -0.01, 0.06);
+      double[] times = curve.nodes();
+      double[] logs = curve.nodeLogDiscounts();
+      double t = random.nextDouble() * (times[times.length - 1] + 3);
+      double[] gradient = new double[times.length];
+      curve.addLogDiscountGradient(t, 2, gradient);
+      for (int k = 0; k < times.length; k++) {
+        double h = 1e-7;
+        double[] up = logs.clone();
+        up[k] += h;
+        double[] down = logs.clone();
+        down[k] -= h;
+        double difference =
+            (InterpolatedCurve.of(interpolation, times, up).logDiscount(t)
+                    - InterpolatedCurve.of(interpolation, times, down).logDiscount(t))
+                / (2 * h);
+        assertThat(gradient[k] / 2).isCloseTo(difference, within(2e-7));
+      }
+    }
+  }
+
+  @Test
+  void monotoneConvexForwardsAreContinuousAndNotNegativeOnPositiveInput() {
+    Random random = new Random(4);
+    for (int i = 0; i < 10_000; i++) {
+      InterpolatedCurve curve = random(Interpolation.MONOTONE_CONVEX, random, 0, 0.1);
+      double[] breaks = curve.breaks();
+      for (int k = 0; k < breaks.length; k++) {
+        double t = breaks[k];
+        assertThat(curve.forward(t)).isGreaterThanOrEqualTo(-1e-15);
+        if (k > 0) {
+          double before = Math.nextDown(t);
+          // a narrow parabola moves within the last bits of t
+          double resolution = 4 * Math.ulp(t) * Math.abs(curve.forwardSlope(before));
+          assertThat(curve.forward(before)).isCloseTo(curve.forward(t), within(1e-13 + resolution));
+          double middle = 0.5 * (breaks[k - 1] + t);
+          assertThat(curve.forward(middle)).isGreaterThanOrEqualTo(-1e-15);
+        }
+      }
+    }
+  }
+
+  @Test
+  void monotoneConvexLeavesNegativeForwardsAlone() {
+    InterpolatedCurve curve =
+        InterpolatedCurve.of(
+            Interpolation.MONOTONE_CONVEX,
+            new double[] {1, 2, 3, 4},
+            new double[] {0.005, 0.012, 0.015, 0.01});
+    assertThat(curve.forward(1.5)).isNegative();
+    assertThat(curve.logDiscount(2)).isEqualTo(0.012);
+    assertThat(curve.forward(2)).isCloseTo(-0.005, within(1e-15)); // the line through the averages
+  }
+
+  @Test
+  void logLinearForwardsJumpToTheRightAndGoOnBeyondTheLastNode() {
+    InterpolatedCurve curve =
+        InterpolatedCurve.of(
+            Interpolation.LOG_LINEAR, new double[] {1, 3}, new double[] {-0.02, -0.08});
+    assertThat(curve.forward(0)).isCloseTo(0.02, within(1e-17));
+    assertThat(curve.zero(0)).isCloseTo(0.02, within(1e-17));
+    assertThat(curve.forward(1)).isCloseTo(0.03, within(1e-16));
+    assertThat(curve.forward(100)).isCloseTo(0.03, within(1e-16));
+    assertThat(curve.logDiscount(5)).isCloseTo(-0.14, within(1e-16));
+    assertThat(curve.hasContinuousForward()).isFalse();
+  }
+
+  @Test
+  void linearZeroHoldsTheFirstAndTheLastZeroRate() {
+    InterpolatedCurve curve =
+        InterpolatedCurve.of(
+            Interpolation.LINEAR_ZERO, new double[] {1, 3}, new double[] {-0.02, -0.12});
+    assertThat(curve.zero(0)).isCloseTo(0.02, within(1e-17));
+    assertThat(curve.zero(0.3)).isCloseTo(0.02, within(1e-17));
+    assertThat(curve.zero(2)).isCloseTo(0.03, within(1e-16));
+    assertThat(curve.zero(9)).isCloseTo(0.04, within(1e-16));
+    assertThat(curve.forward(0.5)).isCloseTo(0.02, within(1e-17));
+  }
+
+  @Test
+  void theNaturalSplineHasNoCurvatureAtItsEnds() {
+    InterpolatedCurve curve =
+        InterpolatedCurve.of(
+            Interpolation.CUBIC,
+            new double[] {1, 2, 4, 7},
+            new double[] {-0.02, -0.05, -0.11, -0.2});
+    assertThat(curve.forwardSlope(0)).isCloseTo(0, within(1e-16));
+    assertThat(curve.forwardSlope(7 - 1e-9)).isCloseTo(0, within(1e-10));
+    assertThat(curve.forward(7 - 1e-9)).isCloseTo(curve.forward(7), within(1e-10));
+    for (double t : new double[] {1, 2, 4}) {
+      assertThat(curve.forward(t - 1e-9)).isCloseTo(curve.forward(t), within(1e-10));
+      assertThat(curve.forwardSlope(t - 1e-9)).isCloseTo(curve.forwardSlope(t), within(1e-9));
+    }
+    assertThat(curve.forward(50)).isEqualTo(curve.forward(7));
+  }
+
+  @Test
+  void aSingleNodeIsAFlatCurve() {
+    for (Interpolation interpolation : Interpolation.values()) {
+      InterpolatedCurve curve =
+          InterpolatedCurve.of(interpolation, new double[] {2}, new double[] {-0.06});
+      assertThat(curve.zero(0.5)).isCloseTo(0.03, within(1e-17));
+      assertThat(curve.zero(20)).isCloseTo(0.03, within(1e-17));
+      assertThat(curve.forward(20)).isCloseTo(0.03, within(1e-17));
+    }
+  }
+
+  @Test
+  void nodesThatMakeNoCurveAreRefusedInWords() {
+    assertThatThrownBy(
+            () ->
+                InterpolatedCurve.of(
+                    Interpolation.CUBIC, new double[] {1, 1}, new double[] {-0.1, -0.2}))
+        .hasMessage("node times must be positive and increase, found 1.0 after 1.0");
+    assertThatThrownBy(
+            () -> InterpolatedCurve.of(Interpolation.CUBIC, new double[] {0}, new double[] {-0.1}))
+        .hasMessageContaining("found 0.0");
+    assertThatThrownBy(
+            () ->
+                InterpolatedCurve.of(
+                    Interpolation.CUBIC, new double[] {1}, new double[] {Double.NaN}))
+        .hasMessageContaining("NaN");
+    assertThatThrownBy(
+            () -> InterpolatedCurve.of(Interpolation.CUBIC, new double[0], new double[0]))
+        .hasMessageContaining("at least one");
+    assertThatThrownBy(() -> Interpolation.of("spline")).hasMessageContaining("monotone-convex");
+    assertThat(Interpolation.of(" Log-Linear ")).isEqualTo(Interpolation.LOG_LINEAR);
+  }
+}

@@ -6,7 +6,7 @@ package ebbline.fitting;
  * <p>z(τ) = r₀ + b τ k(x) − ½σ²τ² h(x) with x = κτ and b = κ(θ − r₀), the drift of the rate today:
  * in (κ, b, σ, r₀) nothing is singular at κ = 0.
  */
-final class VasicekZero {
+public final class VasicekZero {
   /*
    * k(x) = (x − 1 + e^(−x))/x² and h(x) = x^(−3) ∫₀ˣ (1 − e^(−u))² du lose digits near 0, and so do
    * their derivatives. Within |x| < SERIES_BELOW all four are summed from
@@ -30,7 +30,7 @@ final class VasicekZero {
   }
 
   /** The functions at x = κτ. */
-  static VasicekZero at(double x) {
+  public static VasicekZero at(double x) {
     return Math.abs(x) < SERIES_BELOW ? series(x) : closed(x);
   }
 
@@ -71,20 +71,28 @@ final class VasicekZero {
     return new VasicekZero(k, kSlope, h, hSlope);
   }
 
-  double rate(double tau, double drift, double volatility, double shortRate) {
+  /** z(τ); the functions must be those at κτ. */
+  public double rate(double tau, double drift, double volatility, double shortRate) {
     return shortRate + drift * tau * k - 0.5 * volatility * volatility * tau * tau * h;
   }
 
   /** ∂z/∂κ with b held. */
-  double byMeanReversion(double tau, double drift, double volatility) {
+  public double byMeanReversion(double tau, double drift, double volatility) {
     return tau * tau * (drift * kSlope - 0.5 * volatility * volatility * tau * hSlope);
   }
 
-  double byDrift(double tau) {
+  /** ∂z/∂b. */
+  public double byDrift(double tau) {
     return tau * k;
   }
 
-  double byVolatility(double tau, double volatility) {
+  /** ∂z/∂σ. */
+  public double byVolatility(double tau, double volatility) {
     return -volatility * tau * tau * h;
+  }
+
+  /** ∂²z/∂b∂κ, the slope of {@link #byDrift} in κ. */
+  public double byDriftAndMeanReversion(double tau) {
+    return tau * tau * kSlope;
   }
 }

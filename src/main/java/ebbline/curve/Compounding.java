@@ -48,9 +48,13 @@ public enum Compounding {
    *
    * @param rate decimal per year
    * @param t years, at least 0
-   * @throws IllegalArgumentException if no discount factor has this rate (1 + r/m ≤ 0)
+   * @throws IllegalArgumentException if no discount factor has this rate (1 + r/m ≤ 0, for simple
+   *     interest 1 + r t ≤ 0)
    */
   public double logDiscount(double rate, double t) {
+    if (!Double.isFinite(rate)) {
+      throw new IllegalArgumentException("a rate must be finite, found " + rate);
+    }
     if (periods == 0) {
       return -rate * t;
     }
@@ -59,7 +63,13 @@ public enum Compounding {
       return periods < 0 ? -Math.log1p(growth) : -periods * t * Math.log1p(growth);
     }
     throw new IllegalArgumentException(
-        "a rate of " + rate + " leaves nothing to discount with " + label + " compounding");
+        "a rate must leave something to discount with "
+            + label
+            + " compounding, found "
+            + rate
+            + " over "
+            + t
+            + " years");
   }
 
   /** P(0,t) of a rate; see {@link #logDiscount}. */
@@ -67,8 +77,15 @@ public enum Compounding {
     return Math.exp(logDiscount(rate, t));
   }
 
-  /** The rate of ln P(0,t), t above 0. */
+  /**
+   * The rate of ln P(0,t), decimal per year.
+   *
+   * @param t years, above 0
+   */
   public double rate(double logDiscount, double t) {
+    if (!(t > 0)) {
+      throw new IllegalArgumentException("a rate needs a time above 0, found " + t);
+    }
     if (periods == 0) {
       return -logDiscount / t;
     }

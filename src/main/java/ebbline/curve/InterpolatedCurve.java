@@ -3,60 +3,56 @@ package ebbline.curve;
 import java.util.Objects;
 
 /**
- * A curve through nodes. Between them it runs as its interpolation says; beyond the last one the
- * instantaneous forward there goes on ({@code linear-zero}: the last zero rate).
+ * A curve through nodes, which it meets exactly. Between them it runs as its interpolation says;
+ * beyond the last one the instantaneous forward there goes on ({@code linear-zero}: the last zero
+ * rate).
  *
- * <p>All interpolations start from discount 1 at time 0; {@code linear-zero} holds the first zero
- * rate down to there.
+ * <p>All interpolations start from discount 1 at time 0, a knot of theirs; {@code linear-zero}
+ * holds the first zero rate down to there.
  */
 public final class InterpolatedCurve implements DiscountCurve {
   private static final int CELLS_PER_PIECE = 4;
   private static final int MOST_CELLS = 4096;
+  private static final int WIDTH = Pieces.WIDTH;
 
   private final Interpolation interpolation;
   private final double[] times;
   private final double[] logs;
-  private final double[] starts;
-  private final double[] c0;
-  private final double[] c1;
-  private final double[] c2;
-  private final double[] c3;
+  private final Scheme scheme;
+  private final double[] pieces;
+  private final boolean straight;
   private final double cellsPerYear;
   private final int[] firstPiece;
-
-  /** Pieces in the direction of each node, made when sensitivities are first asked for. */
-  private volatile Pieces[] directions;
 
   private InterpolatedCurve(Interpolation interpolation, double[] times, double[] logs) {
     this.interpolation = interpolation;
     this.times = times;
     this.logs = logs;
-    Pieces pieces = PieceBuilder.of(interpolation, times, jets(logs, -1));
-    int n = pieces.count();
-    starts = new double[n];
-    c0 = new double[n];
-    c1 = new double[n];
-    c2 = new double[n];
-    c3 = new double[n];
-    for (int i = 0; i < n; i++) {
-      starts[i] = pieces.start(i);
-      c0[i] = pieces.value(i, 0);
-      c1[i] = pieces.value(i, 1);
-      c2[i] = pieces.value(i, 2);
-      c3[i] = pieces.value(i, 3);
-    }
-    int cells = Math.min(MOST_CELLS, CELLS_PER_PIECE * n);
+    scheme = Scheme.of(interpolation, times, logs);
+    pieces = scheme.pieces().numbers();
+    straight = interpolation == Interpolation.LOG_LINEAR;
+    // A table of equal cells leads to the piece in a step or two, however many pieces there are.
+    int count = pieces.length / WIDTH;
+    int cells = Math.min(MOST_CELLS, CELLS_PER_PIECE * count);
     cellsPerYear = cells / times[times.length - 1];
     firstPiece = new int[cells + 1];
-    for (int cell = 0, i = 0; cell <= cells; cell++) {
-      while (i + 1 < n && starts[i + 1] <= cell / cellsPerYear) {
-        i++;
+    int at = 0;
+    for (int cell = 0; cell <= cells; cell++) {
+      while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= cell / cellsPerYear) {
+        at += WIDTH;
       }
-      firstPiece[cell] = Math.max(0, i - 1); // one early, so that rounding of the cell cannot skip
+      firstPiece[cell] = Math.max(0, at - WIDTH); // one early: rounding of the cell cannot skip
+    }
+    for (double number : pieces) {
+      if (!Double.isFinite(number)) {
+        throw new IllegalArgumentException(
+            "nodes must leave finite forwards; they lie too close together or too far from 1");
+      }
     }
   }
 
   /**
+   * @param interpolation all but {@code smith-wilson}, which needs more than nodes
    * @param times years, positive, strictly increasing, at least one
    * @param logDiscounts ln P at the times, finite
    * @throws IllegalArgumentException if a rule above is broken
@@ -64,67 +60,54 @@ public final class InterpolatedCurve implements DiscountCurve {
   public static InterpolatedCurve of(
       Interpolation interpolation, double[] times, double[] logDiscounts) {
     Objects.requireNonNull(interpolation, "interpolation");
-    if (times.length == 0 || times.length != logDiscounts.length) {
-      throw new IllegalArgumentException(
-          "a curve needs as many log discounts as times and at least one, found "
-              + logDiscounts.length
-              + " and "
-              + times.length);
-    }
-    double previous = 0;
-    for (int i = 0; i < times.length; i++) {
-      if (!(times[i] > previous && Double.isFinite(times[i]))) {
-        throw new IllegalArgumentException(
-            "node times must be positive and increase, found " + times[i] + " after " + previous);
-      }
-      if (!Double.isFinite(logDiscounts[i])) {
-        throw new IllegalArgumentException(
-            "log discounts must be finite, found " + logDiscounts[i] + " at " + times[i]);
-      }
-      previous = times[i];
-    }
+    NodeRules.check(times, logDiscounts);
     return new InterpolatedCurve(interpolation, times.clone(), logDiscounts.clone());
   }
 
-  private static Jet[] jets(double[] logs, int direction) {
-    Jet[] jets = new Jet[logs.length];
-    for (int i = 0; i < logs.length; i++) {
-      jets[i] = new Jet(logs[i], i == direction ? 1 : 0);
-    }
-    return jets;
+  /**
+   * As {@link #of}, from discount factors.
+   *
+   * @param discounts P at the times, positive
+   */
+  public static InterpolatedCurve ofDiscounts(
+      Interpolation interpolation, double[] times, double[] discounts) {
+    return of(interpolation, times, NodeRules.logs(discounts));
   }
 
   public Interpolation interpolation() {
     return interpolation;
   }
 
+  /** Where the piece that holds t begins in the array. */
   private int piece(double t) {
-    int cell = (int) Math.min(t * cellsPerYear, firstPiece.length - 1.0);
-    int i = firstPiece[cell];
-    while (i + 1 < starts.length && starts[i + 1] <= t) {
-      i++;
+    int at = firstPiece[Math.min((int) (t * cellsPerYear), firstPiece.length - 1)];
+    while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= t) {
+      at += WIDTH;
     }
-    return i;
+    return at;
   }
 
   @Override
   public double logDiscount(double t) {
     int i = piece(t);
-    double d = t - starts[i];
-    return c0[i] + d * (c1[i] + d * (c2[i] + d * c3[i]));
+    double d = t - pieces[i];
+    if (straight) {
+      return pieces[i + 1] + d * pieces[i + 2];
+    }
+    return pieces[i + 1] + d * (pieces[i + 2] + d * (pieces[i + 3] + d * pieces[i + 4]));
   }
 
   @Override
   public double forward(double t) {
     int i = piece(t);
-    double d = t - starts[i];
-    return -(c1[i] + d * (2 * c2[i] + 3 * d * c3[i]));
+    double d = t - pieces[i];
+    return -(pieces[i + 2] + d * (2 * pieces[i + 3] + 3 * d * pieces[i + 4]));
   }
 
   @Override
   public double forwardSlope(double t) {
     int i = piece(t);
-    return -(2 * c2[i] + 6 * (t - starts[i]) * c3[i]);
+    return -(2 * pieces[i + 3] + 6 * (t - pieces[i]) * pieces[i + 4]);
   }
 
   @Override
@@ -139,30 +122,20 @@ public final class InterpolatedCurve implements DiscountCurve {
 
   @Override
   public void addLogDiscountGradient(double t, double weight, double[] gradient) {
-    Pieces[] all = directions;
-    if (all == null) {
-      all = new Pieces[times.length];
-      for (int j = 0; j < all.length; j++) {
-        all[j] = PieceBuilder.of(interpolation, times, jets(logs, j));
-      }
-      directions = all; // two threads may both build it: the same figures
-    }
-    int i = piece(t);
-    double d = t - starts[i];
-    for (int j = 0; j < all.length; j++) {
-      gradient[j] += weight * all[j].slope(i, d);
-    }
+    scheme.addGradient(t, weight, gradient);
   }
 
   @Override
   public double[] breaks() {
-    return starts.clone();
+    double[] breaks = new double[pieces.length / WIDTH];
+    for (int i = 0; i < breaks.length; i++) {
+      breaks[i] = pieces[i * WIDTH];
+    }
+    return breaks;
   }
 
   @Override
   public boolean hasContinuousForward() {
-    return interpolation == Interpolation.CUBIC
-        || interpolation == Interpolation.MONOTONE_CONVEX
-        || times.length == 1;
+    return scheme.hasContinuousForward();
   }
 }

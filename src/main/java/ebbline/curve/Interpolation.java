@@ -13,7 +13,9 @@ public enum Interpolation {
   /** Natural cubic spline in ln P. */
   CUBIC("cubic"),
   /** Hagan and West's monotone convex forwards. */
-  MONOTONE_CONVEX("monotone-convex");
+  MONOTONE_CONVEX("monotone-convex"),
+  /** Smith and Wilson's kernels, which lead to an ultimate forward rate. */
+  SMITH_WILSON("smith-wilson");
 
   private final String label;
 

@@ -1,44 +1,34 @@
 package ebbline.curve;
 
-import java.util.ArrayList;
-import java.util.List;
+import java.util.Arrays;
 
 /**
  * ln P as cubics: on the piece that starts at s, ln P(t) = c₀ + c₁ d + c₂ d² + c₃ d³ with d = t −
- * s; the last piece runs on for ever. Every interpolation is one of these.
+ * s; the last piece runs on for ever. Every interpolation through nodes is one of these.
  */
 final class Pieces {
-  private final List<Jet> starts = new ArrayList<>();
-  private final List<Jet[]> coefficients = new ArrayList<>();
+  /** Numbers a piece takes: its start and its four coefficients. */
+  static final int WIDTH = 5;
 
-  /** Adds a piece; starts increase. */
-  void add(Jet start, Jet c0, Jet c1, Jet c2, Jet c3) {
-    starts.add(start);
-    coefficients.add(new Jet[] {c0, c1, c2, c3});
+  private double[] numbers;
+  private int count;
+
+  Pieces(int most) {
+    numbers = new double[WIDTH * most];
   }
 
-  int count() {
-    return starts.size();
+  /** Adds a piece; starts increase strictly. */
+  void add(double start, double c0, double c1, double c2, double c3) {
+    int at = WIDTH * count++;
+    numbers[at] = start;
+    numbers[at + 1] = c0;
+    numbers[at + 2] = c1;
+    numbers[at + 3] = c2;
+    numbers[at + 4] = c3;
   }
 
-  double start(int i) {
-    return starts.get(i).value();
-  }
-
-  /** Value of coefficient {@code power} of piece {@code i}. */
-  double value(int i, int power) {
-    return coefficients.get(i)[power].value();
-  }
-
-  /**
-   * Derivative of ln P at distance d into piece {@code i}, in the direction of the jets. A start
-   * that moves (inside an interval) changes d; ln P and its slope are continuous there, so only the
-   * chain rule through d counts.
-   */
-  double slope(int i, double d) {
-    Jet[] c = coefficients.get(i);
-    double direct = c[0].slope() + d * (c[1].slope() + d * (c[2].slope() + d * c[3].slope()));
-    double inTime = c[1].value() + d * (2 * c[2].value() + 3 * d * c[3].value());
-    return direct - starts.get(i).slope() * inTime;
+  /** Start and coefficients, piece after piece. */
+  double[] numbers() {
+    return Arrays.copyOf(numbers, WIDTH * count);
   }
 }

@@ -31,16 +31,7 @@ public final class SvenssonCurve implements DiscountCurve {
    */
   public static SvenssonCurve of(
       double beta0, double beta1, double beta2, double beta3, double tau1, double tau2) {
-    for (double beta : new double[] {beta0, beta1, beta2, beta3}) {
-      if (!Double.isFinite(beta)) {
-        throw new IllegalArgumentException("betas must be finite, found " + beta);
-      }
-    }
-    for (double tau : new double[] {tau1, tau2}) {
-      if (!(tau > 0 && Double.isFinite(tau))) {
-        throw new IllegalArgumentException("taus must be positive years, found " + tau);
-      }
-    }
+    Loadings.check(new double[] {beta0, beta1, beta2, beta3}, new double[] {tau1, tau2});
     return new SvenssonCurve(beta0, beta1, beta2, beta3, tau1, tau2);
   }
 
@@ -76,15 +67,17 @@ public final class SvenssonCurve implements DiscountCurve {
   @Override
   public double forward(double t) {
     double u = t / tau1;
-    double v = t / tau2;
-    return beta0 + (beta1 + beta2 * u) * Math.exp(-u) + beta3 * v * Math.exp(-v);
+    return beta0
+        + beta1 * Loadings.decay(u)
+        + beta2 * Loadings.hump(u)
+        + beta3 * Loadings.hump(t / tau2);
   }
 
   @Override
   public double forwardSlope(double t) {
     double u = t / tau1;
-    double v = t / tau2;
-    return (beta2 * (1 - u) - beta1) * Math.exp(-u) / tau1 + beta3 * (1 - v) * Math.exp(-v) / tau2;
+    return (beta2 * Loadings.humpSlope(u) - beta1 * Loadings.decay(u)) / tau1
+        + beta3 * Loadings.humpSlope(t / tau2) / tau2;
   }
 
   @Override
@@ -94,9 +87,7 @@ public final class SvenssonCurve implements DiscountCurve {
 
   @Override
   public void addLogDiscountGradient(double t, double weight, double[] gradient) {
-    if (gradient.length != 0) {
-      throw new IllegalArgumentException("a curve from a formula has no nodes");
-    }
+    // No nodes, nothing to add.
   }
 
   @Override

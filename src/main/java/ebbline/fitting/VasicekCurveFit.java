@@ -1,5 +1,6 @@
 package ebbline.fitting;
 
+import ebbline.model.Vasicek;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.EnumMap;
@@ -93,6 +94,15 @@ public final class VasicekCurveFit {
     return report(problem, outcome, settings, warnings);
   }
 
+  /** The model at a point that {@link #fit} found, under the pricing measure. */
+  public static Vasicek model(FitPoint point) {
+    return new Vasicek(
+        point.value(Parameter.SHORT_RATE),
+        point.value(Parameter.LONG_RUN_MEAN),
+        point.value(Parameter.MEAN_REVERSION),
+        point.value(Parameter.VOLATILITY));
+  }
+
   private static LeastSquares.Outcome search(
       VasicekProblem problem, int observations, int iterations) {
     if (problem.free().isEmpty()) {
@@ -155,7 +165,7 @@ public final class VasicekCurveFit {
         || meanReversion > settings.highestMeanReversion() - margin;
   }
 
-  private static String label(double time) {
+  static String label(double time) {
     return time == Math.rint(time) && time < 1e6
         ? String.format(Locale.ROOT, "%.0f", time)
         : Double.toString(time);
@@ -169,7 +179,7 @@ public final class VasicekCurveFit {
     return sum;
   }
 
-  private static void requirePoints(double[] times, double[] zeroRates) {
+  static void requirePoints(double[] times, double[] zeroRates) {
     if (times.length != zeroRates.length || times.length == 0) {
       throw new IllegalArgumentException(
           "a fit needs as many zero rates as times and at least one, found "

@@ -32,7 +32,7 @@ class VasicekCurveFitTest {
   void parametersThatMadeTheRatesAreRecovered() {
     SplittableRandom random = new SplittableRandom(11);
     double worst = 0;
-    for (int i = 0; i < 200; i++) {
+    for (int i = 0; i < 60; i++) {
       double kappa = 0.03 * Math.exp(random.nextDouble() * Math.log(1 / 0.03));
       double theta = -0.01 + 0.12 * random.nextDouble();
       double r0 = theta + (random.nextBoolean() ? 1 : -1) * (0.005 + 0.03 * random.nextDouble());

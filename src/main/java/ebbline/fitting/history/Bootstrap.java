@@ -89,13 +89,13 @@ public final class Bootstrap {
       for (int i = 0; i < laws; i++) {
         double step = regular ? history.step() : history.time(i + 1) - history.time(i);
         moved[i] = -Math.expm1(-law.meanReversion() * step);
-        sd[i] = law.conditional(0, step).sd();
+        sd[i] = law.conditional(0, step).standardDeviation();
       }
     }
 
     double[] next(ZigguratSampler.NormalizedGaussian normal) {
       double[] rates = new double[size];
-      double off = law.stationary().sd() * normal.sample();
+      double off = law.stationary().standardDeviation() * normal.sample();
       rates[0] = law.longRunMean() + off;
       for (int i = 1; i < size; i++) {
         int j = regular ? 0 : i - 1;

@@ -210,7 +210,7 @@ public final class HistoryEstimator {
     return new Regression(
         law.longRunMean() * below,
         slope,
-        law.conditional(0, step).sd(),
+        law.conditional(0, step).standardDeviation(),
         Math.sqrt(Math.max(0, variance)),
         step * slope * precision.meanReversionError());
   }

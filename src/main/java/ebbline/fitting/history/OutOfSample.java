@@ -1,5 +1,6 @@
 package ebbline.fitting.history;
 
+import ebbline.model.NormalLaw;
 import java.util.Arrays;
 import org.apache.commons.statistics.distribution.NormalDistribution;
 
@@ -108,8 +109,8 @@ public record OutOfSample(
       if (law == null) {
         return (history.rate(to) - rate - drift * horizon) / (volatility * Math.sqrt(horizon));
       }
-      RateLaw.Normal ahead = law.conditional(rate, horizon);
-      return (history.rate(to) - ahead.mean()) / ahead.sd();
+      NormalLaw ahead = law.conditional(rate, horizon);
+      return (history.rate(to) - ahead.mean()) / ahead.standardDeviation();
     }
   }
 

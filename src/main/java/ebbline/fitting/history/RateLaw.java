@@ -1,5 +1,8 @@
 package ebbline.fitting.history;
 
+import ebbline.model.NormalLaw;
+import ebbline.model.Vasicek;
+
 /**
  * The estimated law of the rate, dr = κ(θ − r)dt + σ dW under the historical measure, and what
  * follows from it at any horizon.
@@ -22,22 +25,14 @@ public record RateLaw(double meanReversion, double longRunMean, double volatilit
     }
   }
 
-  /**
-   * A normal law.
-   *
-   * @param mean decimal per year
-   * @param sd standard deviation, at least 0
-   */
-  public record Normal(double mean, double sd) {}
-
   /** Years until half of a distance from the mean is gone, ln 2/κ. */
   public double halfLife() {
     return Math.log(2) / meanReversion;
   }
 
   /** The law of the rate after very long: mean θ, variance σ²/2κ. */
-  public Normal stationary() {
-    return new Normal(longRunMean, volatility / Math.sqrt(2 * meanReversion));
+  public NormalLaw stationary() {
+    return new NormalLaw(longRunMean, volatility / Math.sqrt(2 * meanReversion));
   }
 
   /**
@@ -45,12 +40,17 @@ public record RateLaw(double meanReversion, double longRunMean, double volatilit
    *
    * @param horizon years, at least 0
    */
-  public Normal conditional(double rate, double horizon) {
+  public NormalLaw conditional(double rate, double horizon) {
     if (!(horizon >= 0 && Double.isFinite(horizon))) {
       throw new IllegalArgumentException("a horizon must be at least 0, found " + horizon);
     }
     double moved = -Math.expm1(-meanReversion * horizon);
     double variance = Decay.at(2 * meanReversion * horizon).g * horizon;
-    return new Normal(rate + moved * (longRunMean - rate), volatility * Math.sqrt(variance));
+    return new NormalLaw(rate + moved * (longRunMean - rate), volatility * Math.sqrt(variance));
+  }
+
+  /** The model of this law, historical measure, with the rate now at {@code shortRate}. */
+  public Vasicek from(double shortRate) {
+    return new Vasicek(shortRate, longRunMean, meanReversion, volatility);
   }
 }

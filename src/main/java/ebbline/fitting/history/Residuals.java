@@ -1,5 +1,7 @@
 package ebbline.fitting.history;
 
+import ebbline.model.NormalLaw;
+
 /** Residuals of a history under a law, each over its standard deviation. */
 final class Residuals {
   private Residuals() {}
@@ -8,8 +10,8 @@ final class Residuals {
     double[] residuals = new double[history.size() - 1];
     for (int i = 0; i < residuals.length; i++) {
       double step = history.isRegular() ? history.step() : history.time(i + 1) - history.time(i);
-      RateLaw.Normal next = law.conditional(history.rate(i), step);
-      residuals[i] = (history.rate(i + 1) - next.mean()) / next.sd();
+      NormalLaw next = law.conditional(history.rate(i), step);
+      residuals[i] = (history.rate(i + 1) - next.mean()) / next.standardDeviation();
     }
     return residuals;
   }

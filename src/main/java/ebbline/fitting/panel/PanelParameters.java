@@ -1,5 +1,7 @@
 package ebbline.fitting.panel;
 
+import ebbline.model.Vasicek;
+
 /**
  * Vasicek under both measures with measurement noise. Historical: dr = κ(θ − r)dt + σ dW; pricing:
  * drift κ(θ − r) − λσ.
@@ -42,5 +44,15 @@ public record PanelParameters(
   /** θ − λσ/κ, the long-run mean under the pricing measure. */
   public double pricingMean() {
     return longRunMean - marketPriceOfRisk * volatility / meanReversion;
+  }
+
+  /** The model under the historical measure, the rate now at {@code shortRate}. */
+  public Vasicek historical(double shortRate) {
+    return new Vasicek(shortRate, longRunMean, meanReversion, volatility);
+  }
+
+  /** The model under the pricing measure, the rate now at {@code shortRate}. */
+  public Vasicek riskNeutral(double shortRate) {
+    return historical(shortRate).riskNeutral(marketPriceOfRisk);
   }
 }

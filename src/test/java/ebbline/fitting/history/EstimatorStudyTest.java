@@ -12,9 +12,9 @@ import org.junit.jupiter.params.provider.ValueSource;
  * prints stands in docs/validation.md.
  */
 class EstimatorStudyTest {
-  private static final int HISTORIES = 1000;
+  private static final int HISTORIES = 800;
   private static final double CONFIDENCE = 0.95;
-  private static final Resampling CRITICAL = new Resampling(9999, 77);
+  private static final Resampling CRITICAL = new Resampling(4999, 77);
 
   @ParameterizedTest
   @ValueSource(doubles = {0.1, 0.2, 0.5})
@@ -32,7 +32,7 @@ class EstimatorStudyTest {
     int gaussianCovered = 0;
     int percentileCovered = 0;
     for (int k = 0; k < HISTORIES; k++) {
-      RateHistory history = RateHistory.of(times, Histories.draw(truth, times, 1000 + k));
+      RateHistory history = RateHistory.of(times, Histories.draw(truth, times, 5_000_000L + k));
       if (!(HistoryEstimator.estimate(history, HistoryMethod.EXACT) instanceof Reverting found)) {
         continue;
       }

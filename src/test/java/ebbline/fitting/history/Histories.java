@@ -1,6 +1,7 @@
 package ebbline.fitting.history;
 
 import ebbline.fitting.ReferenceCsv;
+import ebbline.model.NormalLaw;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
@@ -69,12 +70,12 @@ final class Histories {
     UniformRandomProvider random = RandomSource.XO_SHI_RO_256_PP.create(seed);
     ZigguratSampler.NormalizedGaussian normal = ZigguratSampler.NormalizedGaussian.of(random);
     double[] rates = new double[times.length];
-    RateLaw.Normal here = law.stationary();
+    NormalLaw here = law.stationary();
     for (int i = 0; i < times.length; i++) {
       if (i > 0) {
         here = law.conditional(rates[i - 1], times[i] - times[i - 1]);
       }
-      rates[i] = here.mean() + here.sd() * normal.sample();
+      rates[i] = here.mean() + here.standardDeviation() * normal.sample();
     }
     return rates;
   }

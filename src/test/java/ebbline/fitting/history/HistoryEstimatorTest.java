@@ -7,6 +7,7 @@ import static org.assertj.core.api.Assertions.within;
 import ebbline.fitting.history.HistoryEstimate.Reason;
 import ebbline.fitting.history.HistoryEstimate.Reverting;
 import ebbline.fitting.history.HistoryEstimate.Undetermined;
+import ebbline.model.NormalLaw;
 import java.util.Arrays;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -213,11 +214,13 @@ class HistoryEstimatorTest {
   @Test
   void theLawForgetsItsStartAtTheHalfLife() {
     assertThat(LAW.halfLife()).isCloseTo(1.7328679513998633, within(1e-15));
-    RateLaw.Normal there = LAW.conditional(0.05, LAW.halfLife());
+    NormalLaw there = LAW.conditional(0.05, LAW.halfLife());
     assertThat(there.mean()).isCloseTo(0.04, within(1e-15));
-    assertThat(there.sd()).isCloseTo(LAW.stationary().sd() * Math.sqrt(0.75), within(1e-15));
-    assertThat(LAW.conditional(0.05, 0)).isEqualTo(new RateLaw.Normal(0.05, 0));
-    assertThat(LAW.conditional(0.05, 1e4).sd()).isCloseTo(LAW.stationary().sd(), within(1e-16));
+    assertThat(there.standardDeviation())
+        .isCloseTo(LAW.stationary().standardDeviation() * Math.sqrt(0.75), within(1e-15));
+    assertThat(LAW.conditional(0.05, 0)).isEqualTo(new NormalLaw(0.05, 0));
+    assertThat(LAW.conditional(0.05, 1e4).standardDeviation())
+        .isCloseTo(LAW.stationary().standardDeviation(), within(1e-16));
   }
 
   @Test

@@ -49,7 +49,7 @@ class HistoryReferenceTest {
     check(law.longRunMean(), set, prefix + "theta");
     check(law.volatility(), set, prefix + "sigma");
     check(law.halfLife(), set, prefix + "half_life");
-    check(law.stationary().sd(), set, prefix + "stationary_sd");
+    check(law.stationary().standardDeviation(), set, prefix + "stationary_sd");
     check(estimate.precision().meanReversionError(), set, prefix + "se_kappa");
     check(estimate.precision().longRunMeanError(), set, prefix + "se_theta");
     check(estimate.precision().volatilityError(), set, prefix + "se_sigma");

@@ -308,4 +308,29 @@ class VasicekCurveFitTest {
             () -> VasicekCurveFit.fit(one, new double[] {0.02}, Map.of(VOLATILITY, -0.1), STANDARD))
         .hasMessage("volatility must be at least 0, found -0.1");
   }
+
+  @Test
+  void anyPointsEndInFiniteFigures() {
+    SplittableRandom random = new SplittableRandom(77);
+    for (int trial = 0; trial < 60; trial++) {
+      int n = 4 + random.nextInt(9);
+      double[] times = new double[n];
+      double[] rates = new double[n];
+      for (int i = 0; i < n; i++) {
+        times[i] = (i == 0 ? 0 : times[i - 1]) + 0.003 * Math.exp(8 * random.nextDouble());
+        rates[i] = random.nextInt(3) == 0 ? 0.02 : 0.2 * (random.nextDouble() - 0.5);
+      }
+      double longest = Math.min(1, 200 / times[n - 1]);
+      for (int i = 0; i < n; i++) {
+        times[i] *= longest;
+      }
+      FitPoint best = VasicekCurveFit.fit(times, rates, Map.of(), STANDARD).best();
+      assertThat(best.rmse()).isBetween(0.0, 0.2);
+      assertThat(best.uncertainty().conditionNumber()).isFinite();
+      for (Parameter p : best.uncertainty().free()) {
+        best.uncertainty().standardError(p).ifPresent(e -> assertThat(e).isFinite());
+      }
+      assertThat(String.join(" ", best.warnings())).doesNotContain("NaN", "Infinity");
+    }
+  }
 }

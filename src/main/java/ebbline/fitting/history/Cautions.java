@@ -1,6 +1,7 @@
 package ebbline.fitting.history;
 
 import ebbline.fitting.history.HistoryEstimate.Regression;
+import ebbline.fitting.history.HistoryEstimate.Reverting;
 import ebbline.fitting.history.HistoryEstimate.Sample;
 import java.util.ArrayList;
 import java.util.List;
@@ -13,8 +14,12 @@ final class Cautions {
 
   private Cautions() {}
 
-  static List<String> of(
-      RateHistory history, Sample sample, RateLaw law, Precision precision, Regression line) {
+  /** Of an estimate whose largest move is {@code share} of all squared moves. */
+  static List<String> of(Reverting estimate, double share) {
+    Sample sample = estimate.sample();
+    RateLaw law = estimate.law();
+    Precision precision = estimate.precision();
+    Regression line = estimate.regression();
     List<String> cautions = new ArrayList<>();
     double t = (line.slope() - 1) / line.slopeError();
     if (!(t < NOT_FROM_ONE)) {
@@ -43,24 +48,13 @@ final class Cautions {
               Refusals.percent(sample.highest()),
               Refusals.percent(sample.mean())));
     }
-    addOneMove(cautions, history);
-    return cautions;
-  }
-
-  private static void addOneMove(List<String> cautions, RateHistory history) {
-    double largest = 0;
-    double all = 0;
-    for (int i = 1; i < history.size(); i++) {
-      double change = history.rate(i) - history.rate(i - 1);
-      all += change * change;
-      largest = Math.max(largest, change * change);
-    }
-    if (largest > 0.5 * all) {
+    if (share > 0.5) {
       cautions.add(
           String.format(
               Locale.ROOT,
               "one move makes up %.0f %% of all squared moves: the estimate rests on it",
-              100 * largest / all));
+              100 * share));
     }
+    return cautions;
   }
 }

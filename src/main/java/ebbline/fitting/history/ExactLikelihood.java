@@ -12,6 +12,9 @@ final class ExactLikelihood {
   private final double[] steps;
   private final boolean stationary;
 
+  /** Sums that replace the passes over even steps; null on uneven ones. */
+  private final LaggedSums even;
+
   /** The point last evaluated. */
   double meanReversion;
 
@@ -30,6 +33,7 @@ final class ExactLikelihood {
     this.x = history.ratesInPlace();
     this.stationary = stationary;
     this.steps = new double[x.length - 1];
+    this.even = history.isRegular() ? LaggedSums.of(x) : null;
     for (int i = 0; i < steps.length; i++) {
       steps[i] = history.isRegular() ? history.step() : history.time(i + 1) - history.time(i);
     }
@@ -43,6 +47,10 @@ final class ExactLikelihood {
   /** Evaluates the profile at κ. */
   void at(double kappa) {
     meanReversion = kappa;
+    if (even != null) {
+      atEven(kappa);
+      return;
+    }
     // Residual of a step: e = δ + κ gΔ x − m gΔ with variance w = Δ g(2κΔ), g as in Decay; x is
     // measured from the first rate, so that the drift is the one there.
     double origin = x[0];
@@ -100,6 +108,39 @@ final class ExactLikelihood {
     driftAtFirst = m;
     variance = squares / n;
     logLikelihood = -0.5 * (n * (Math.log(2 * Math.PI * variance) + 1) + logs);
+    slope = -0.5 * (squaresSlope / variance + logsSlope);
+  }
+
+  /** The same for even steps from the sums: all residuals are δ + κ gΔ x − m gΔ. */
+  private void atEven(double kappa) {
+    double step = steps[0];
+    int n = even.n;
+    Decay one = Decay.at(kappa * step);
+    Decay two = Decay.at(2 * kappa * step);
+    double reach = one.g * step;
+    double reachSlope = one.slope * step * step;
+    double width = two.g * step;
+    double widthSlope = 2 * two.slope * step * step;
+    double pull = kappa * reach;
+    double pullSlope = reach + kappa * reachSlope;
+    // Mean residual without drift; the drift takes it away but for the first rate's pull on m.
+    double gap = even.meanChange + pull * even.mean;
+    double first = stationary ? 2 / kappa : 0;
+    double m = n * gap * reach / width / (first + n * reach * reach / width);
+    double off = gap - m * reach;
+    double offSlope = pullSlope * even.mean - m * reachSlope;
+    double sum = even.changes + 2 * pull * even.cross + pull * pull * even.square + n * off * off;
+    double sumSlope = 2 * pullSlope * (even.cross + pull * even.square) + 2 * n * off * offSlope;
+    double squares = first * m * m + sum / width;
+    double squaresSlope =
+        (stationary ? -2 * m * m / (kappa * kappa) : 0)
+            + (sumSlope - sum * widthSlope / width) / width;
+    double logs = n * Math.log(width) - (stationary ? Math.log(2 * kappa) : 0);
+    double logsSlope = n * widthSlope / width - (stationary ? 1 / kappa : 0);
+    int terms = terms();
+    driftAtFirst = m;
+    variance = squares / terms;
+    logLikelihood = -0.5 * (terms * (Math.log(2 * Math.PI * variance) + 1) + logs);
     slope = -0.5 * (squaresSlope / variance + logsSlope);
   }
 

@@ -92,6 +92,10 @@ public sealed interface HistoryEstimate {
     public Reverting {
       warnings = List.copyOf(warnings);
     }
+
+    Reverting with(List<String> said) {
+      return new Reverting(sample, method, law, regression, logLikelihood, precision, said);
+    }
   }
 
   /** Why there is no estimate. */

@@ -4,6 +4,7 @@ import ebbline.fitting.history.HistoryEstimate.Regression;
 import ebbline.fitting.history.HistoryEstimate.Reverting;
 import ebbline.fitting.history.HistoryEstimate.Sample;
 import ebbline.fitting.history.HistoryEstimate.Undetermined;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -22,45 +23,47 @@ public final class HistoryEstimator {
           "yule-walker needs evenly spaced rates without gaps; use exact or stationary here, or"
               + " give --step if the dates only mark even steps");
     }
-    Sample sample = sample(history);
-    Optional<Undetermined> refusal = Refusals.beforeFitting(history, sample, method);
+    if (history.size() < Refusals.FEWEST) {
+      return Refusals.tooFew(history, method);
+    }
+    LaggedSums sums = LaggedSums.of(history.ratesInPlace());
+    Extremes extremes = Extremes.of(history.ratesInPlace());
+    Sample sample = sample(history, sums, extremes);
+    Optional<Undetermined> refusal =
+        Refusals.beforeFitting(history, sample, sums, extremes, method);
     if (refusal.isPresent()) {
       return refusal.get();
     }
-    return switch (method) {
-      case OLS, EXACT ->
-          history.isRegular()
-              ? regression(history, sample, method)
-              : likelihood(history, sample, method);
-      case STATIONARY -> likelihood(history, sample, method);
-      case YULE_WALKER -> autocovariances(history, sample);
-    };
+    HistoryEstimate estimate =
+        switch (method) {
+          case OLS, EXACT ->
+              history.isRegular()
+                  ? regression(history, sample, sums, method)
+                  : likelihood(history, sample, method);
+          case STATIONARY -> likelihood(history, sample, method);
+          case YULE_WALKER -> autocovariances(history, sample);
+        };
+    return estimate instanceof Reverting found
+        ? found.with(Cautions.of(found, extremes.largestMove() / sums.squaredChanges()))
+        : estimate;
   }
 
-  static Sample sample(RateHistory history) {
-    double low = Double.POSITIVE_INFINITY;
-    double high = Double.NEGATIVE_INFINITY;
-    for (double r : history.ratesInPlace()) {
-      low = Math.min(low, r);
-      high = Math.max(high, r);
-    }
-    boolean empty = history.size() == 0;
+  private static Sample sample(RateHistory history, LaggedSums sums, Extremes extremes) {
     return new Sample(
         history.size(),
         history.missing(),
         history.span(),
         history.step(),
         history.isRegular(),
-        history.mean(),
-        history.deviation(),
-        empty ? 0 : low,
-        empty ? 0 : high,
-        empty ? 0 : history.rate(history.size() - 1));
+        sums.meanOfAll(),
+        sums.deviationOfAll(),
+        extremes.lowest(),
+        extremes.highest(),
+        history.rate(history.size() - 1));
   }
 
   private static HistoryEstimate regression(
-      RateHistory history, Sample sample, HistoryMethod method) {
-    LaggedSums sums = LaggedSums.of(history.ratesInPlace());
+      RateHistory history, Sample sample, LaggedSums sums, HistoryMethod method) {
     double below = -sums.changeSlope();
     if (!(below > 0)) {
       return Refusals.noReversion(history, sample, method, OptionalDouble.of(1 - below));
@@ -97,14 +100,7 @@ public final class HistoryEstimator {
     Precision precision = Precision.of(delta(variances, ofKappa, ofTheta, ofSigma));
     double logLikelihood = -0.5 * n * (Math.log(2 * Math.PI * sums.residuals() / n) + 1);
     RateLaw law = new RateLaw(kappa, theta, sigma);
-    return new Reverting(
-        sample,
-        method,
-        law,
-        line,
-        logLikelihood,
-        precision,
-        Cautions.of(history, sample, law, precision, line));
+    return new Reverting(sample, method, law, line, logLikelihood, precision, List.of());
   }
 
   private static double[][] delta(double[] variances, double[]... gradients) {
@@ -140,14 +136,7 @@ public final class HistoryEstimator {
     RateLaw law =
         new RateLaw(best.meanReversion, best.longRunMean(), Math.sqrt(best.variance) * correction);
     Regression line = overMeanStep(history, law, precision);
-    return new Reverting(
-        sample,
-        method,
-        law,
-        line,
-        best.logLikelihood,
-        precision,
-        Cautions.of(history, sample, law, precision, line));
+    return new Reverting(sample, method, law, line, best.logLikelihood, precision, List.of());
   }
 
   private static HistoryEstimate autocovariances(RateHistory history, Sample sample) {
@@ -189,13 +178,7 @@ public final class HistoryEstimator {
                 new double[] {0, 0.5 * sigma * logRatio, 0.5 * sigma / s2}));
     Regression line = overMeanStep(history, law, precision);
     return new Reverting(
-        sample,
-        HistoryMethod.YULE_WALKER,
-        law,
-        line,
-        logLikelihood,
-        precision,
-        Cautions.of(history, sample, law, precision, line));
+        sample, HistoryMethod.YULE_WALKER, law, line, logLikelihood, precision, List.of());
   }
 
   /** The regression that the law implies over the mean step, errors by the delta method. */

@@ -9,10 +9,10 @@ package ebbline.fitting.history;
  */
 final class LaggedSums {
   /*
-   * Each of LANES accumulators takes every LANES-th value: a loop over them has no serial chain, so
-   * the compiler turns it into vector instructions (a single running sum costs 4 cycles a value).
+   * Four running sums of each kind: one alone waits 4 cycles for itself at every value. Vector
+   * instructions are out of reach on Java 17, whose compiler refuses loops over two overlapping
+   * stretches of one array.
    */
-  private static final int LANES = 256;
 
   /** Transitions. */
   final int n;
@@ -47,16 +47,46 @@ final class LaggedSums {
   static LaggedSums of(double[] x) {
     int n = x.length - 1;
     double origin = x[0];
-    double[] first = new double[LANES];
-    double[] second = new double[LANES];
-    double[] third = new double[LANES];
+    double a0 = 0;
+    double a1 = 0;
+    double a2 = 0;
+    double a3 = 0;
+    double b0 = 0;
+    double b1 = 0;
+    double b2 = 0;
+    double b3 = 0;
+    double c0 = 0;
+    double c1 = 0;
+    double c2 = 0;
+    double c3 = 0;
+    double d0 = 0;
     int i = 0;
-    for (; i + LANES <= n; i += LANES) {
-      add(x, i, origin, first, second, third);
+    for (; i + 4 <= n; i += 4) {
+      double d1 = x[i + 1] - origin;
+      double d2 = x[i + 2] - origin;
+      double d3 = x[i + 3] - origin;
+      double d4 = x[i + 4] - origin;
+      double e0 = d1 - d0;
+      double e1 = d2 - d1;
+      double e2 = d3 - d2;
+      double e3 = d4 - d3;
+      a0 += d0;
+      a1 += d1;
+      a2 += d2;
+      a3 += d3;
+      b0 = Math.fma(d0, d0, b0);
+      b1 = Math.fma(d1, d1, b1);
+      b2 = Math.fma(d2, d2, b2);
+      b3 = Math.fma(d3, d3, b3);
+      c0 = Math.fma(e0, e0, c0);
+      c1 = Math.fma(e1, e1, c1);
+      c2 = Math.fma(e2, e2, c2);
+      c3 = Math.fma(e3, e3, c3);
+      d0 = d4;
     }
-    double sum = total(first);
-    double squares = total(second);
-    double changes = total(third);
+    double sum = a0 + a1 + (a2 + a3);
+    double squares = b0 + b1 + (b2 + b3);
+    double changes = c0 + c1 + (c2 + c3);
     for (; i < n; i++) {
       double d = x[i] - origin;
       double delta = x[i + 1] - x[i];
@@ -78,25 +108,6 @@ final class LaggedSums {
         meanChange);
   }
 
-  private static void add(
-      double[] x, int from, double origin, double[] first, double[] second, double[] third) {
-    for (int j = 0; j < LANES; j++) {
-      double d = x[from + j] - origin;
-      double delta = x[from + j + 1] - x[from + j];
-      first[j] += d;
-      second[j] = Math.fma(d, d, second[j]);
-      third[j] = Math.fma(delta, delta, third[j]);
-    }
-  }
-
-  private static double total(double[] lanes) {
-    double sum = 0;
-    for (double lane : lanes) {
-      sum += lane;
-    }
-    return sum;
-  }
-
   /** Slope of the change on the earlier value: the lagged slope less 1. */
   double changeSlope() {
     return cross / square;
@@ -110,5 +121,21 @@ final class LaggedSums {
   /** Sum of squared residuals. */
   double residuals() {
     return Math.max(0, changes - cross * cross / square);
+  }
+
+  /** Mean of all values, the last too. */
+  double meanOfAll() {
+    return origin + (mean * n + meanChange * n) / (n + 1);
+  }
+
+  /** Root of the mean squared deviation of all values from their mean. */
+  double deviationOfAll() {
+    double last = meanChange * n - mean;
+    return Math.sqrt(Math.max(0, square + last * last * n / (n + 1.0)) / (n + 1));
+  }
+
+  /** Sum of squared changes. */
+  double squaredChanges() {
+    return changes + n * meanChange * meanChange;
   }
 }

@@ -11,30 +11,54 @@ import java.util.OptionalDouble;
 /** The histories that hold no estimate of a mean reversion, and what they still hold. */
 final class Refusals {
   /** Three transitions leave one to spare after slope and intercept. */
-  private static final int FEWEST = 4;
+  static final int FEWEST = 4;
 
   private Refusals() {}
 
-  static Optional<Undetermined> beforeFitting(
-      RateHistory history, Sample sample, HistoryMethod method) {
+  static Undetermined tooFew(RateHistory history, HistoryMethod method) {
     int n = history.size();
-    if (n < FEWEST) {
-      return Optional.of(
-          refuse(
-              sample,
-              method,
-              Reason.TOO_FEW,
-              n == 0
-                  ? "the history has no rate at all"
-                  : String.format(
-                      Locale.ROOT,
-                      "%d rates are too few: slope, intercept and noise need at least %d; the mean"
-                          + " of what is there is %s",
-                      n,
-                      FEWEST,
-                      percent(sample.mean())),
-              Optional.empty()));
+    double low = Double.POSITIVE_INFINITY;
+    double high = Double.NEGATIVE_INFINITY;
+    for (double rate : history.ratesInPlace()) {
+      low = Math.min(low, rate);
+      high = Math.max(high, rate);
     }
+    Sample sample =
+        new Sample(
+            n,
+            history.missing(),
+            history.span(),
+            history.step(),
+            history.isRegular(),
+            history.mean(),
+            history.deviation(),
+            n == 0 ? 0 : low,
+            n == 0 ? 0 : high,
+            n == 0 ? 0 : history.rate(n - 1));
+    return refuse(
+        sample,
+        method,
+        Reason.TOO_FEW,
+        n == 0
+            ? "the history has no rate at all"
+            : String.format(
+                Locale.ROOT,
+                "%d %s too few: slope, intercept and noise need at least %d; the mean of what is"
+                    + " there is %s",
+                n,
+                n == 1 ? "rate is" : "rates are",
+                FEWEST,
+                percent(sample.mean())),
+        Optional.empty());
+  }
+
+  static Optional<Undetermined> beforeFitting(
+      RateHistory history,
+      Sample sample,
+      LaggedSums sums,
+      Extremes extremes,
+      HistoryMethod method) {
+    int n = history.size();
     double size = Math.max(Math.abs(sample.lowest()), Math.abs(sample.highest()));
     if (!(sample.highest() - sample.lowest() > 4 * Math.ulp(size))) {
       return Optional.of(
@@ -50,23 +74,10 @@ final class Refusals {
                   percent(sample.mean())),
               Optional.empty()));
     }
-    return moves(history, sample, method);
-  }
-
-  private static Optional<Undetermined> moves(
-      RateHistory history, Sample sample, HistoryMethod method) {
-    int moves = 0;
-    int where = 0;
-    double squares = 0;
-    for (int i = 1; i < history.size(); i++) {
-      double change = history.rate(i) - history.rate(i - 1);
-      squares += change * change;
-      if (change != 0) {
-        moves++;
-        where = i;
-      }
-    }
-    if (moves == 1) {
+    double squares = sums.squaredChanges();
+    // What is left besides one move is rounding of the sums, or nothing.
+    if (extremes.largestMove() > squares * (1 - 1e-12)) {
+      int where = extremes.after();
       return Optional.of(
           refuse(
               sample,
@@ -79,26 +90,22 @@ final class Refusals {
                   percent(history.rate(where - 1)),
                   percent(history.rate(where)),
                   where,
-                  history.size() - 1),
+                  n - 1),
               Optional.empty()));
     }
-    if (history.isRegular()) {
-      LaggedSums sums = LaggedSums.of(history.ratesInPlace());
-      // Less is rounding of the sums.
-      if (!(sums.residuals() > 1e-12 * squares)) {
-        return Optional.of(
-            refuse(
-                sample,
-                method,
-                Reason.WITHOUT_NOISE,
-                String.format(
-                    Locale.ROOT,
-                    "each rate follows from the one before without any error (slope %.10g,"
-                        + " intercept %.6g): this is no random history, and its volatility is 0",
-                    1 + sums.changeSlope(),
-                    sums.intercept()),
-                Optional.empty()));
-      }
+    if (history.isRegular() && !(sums.residuals() > 1e-12 * squares)) {
+      return Optional.of(
+          refuse(
+              sample,
+              method,
+              Reason.WITHOUT_NOISE,
+              String.format(
+                  Locale.ROOT,
+                  "each rate follows from the one before without any error (slope %.10g, intercept"
+                      + " %.6g): this is no random history, and its volatility is 0",
+                  1 + sums.changeSlope(),
+                  sums.intercept()),
+              Optional.empty()));
     }
     return Optional.empty();
   }

@@ -1,0 +1,162 @@
+package ebbline.instrument;
+
+import ebbline.time.DayCount;
+import ebbline.time.Moment;
+import ebbline.time.TimeAxis;
+import java.time.LocalDate;
+import java.time.temporal.ChronoUnit;
+import java.util.List;
+import java.util.Objects;
+
+/**
+ * A bond with a fixed coupon and one redemption at maturity.
+ *
+ * <p>With a dated maturity the coupons fall on dates and accrue by the day count; with a bare
+ * number of years they fall every 1/frequency years back from maturity and accrue by exactly that.
+ *
+ * @param maturity last coupon and redemption
+ * @param coupon annual rate, a decimal
+ * @param frequency coupons a year: 1, 2, 4 or 12
+ * @param dayCount how coupons accrue on dates
+ * @param redemption per 100 face; above 0
+ * @param settleDays business days (weekends only) from the as-of date to settlement; dates only
+ */
+public record Bond(
+    Moment maturity,
+    double coupon,
+    int frequency,
+    DayCount dayCount,
+    double redemption,
+    int settleDays)
+    implements Instrument {
+  private static final int LONGEST_YEARS = 200;
+
+  public Bond {
+    Objects.requireNonNull(maturity, "maturity");
+    Objects.requireNonNull(dayCount, "dayCount");
+    Terms.requireRedemption(redemption);
+    if (!Double.isFinite(coupon)) {
+      throw new IllegalArgumentException("coupon must be finite, found " + coupon);
+    }
+    if (frequency != 1 && frequency != 2 && frequency != 4 && frequency != 12) {
+      throw new IllegalArgumentException("frequency must be 1, 2, 4 or 12, found " + frequency);
+    }
+    if (settleDays < 0) {
+      throw new IllegalArgumentException("settle_days must be at least 0, found " + settleDays);
+    }
+  }
+
+  @Override
+  public String kind() {
+    return "bond";
+  }
+
+  @Override
+  public Claim claim(TimeAxis axis) {
+    if (!axis.isDated(maturity)) {
+      return new Claim(flowsAfter(0, axis), List.of(), 0, accrued(0, axis));
+    }
+    LocalDate settlement = settlement(axis);
+    double time = axis.years(settlement);
+    return new Claim(flowsAfter(time, axis), List.of(), time, accrued(time, axis));
+  }
+
+  private LocalDate settlement(TimeAxis axis) {
+    LocalDate day = axis.asOf().orElseThrow();
+    for (int left = settleDays; left > 0; ) {
+      day = day.plusDays(1);
+      if (day.getDayOfWeek().getValue() <= 5) {
+        left--;
+      }
+    }
+    return day;
+  }
+
+  /** Coupons and redemption after a time. */
+  CashFlows flowsAfter(double time, TimeAxis axis) {
+    double end = axis.years(maturity);
+    Terms.requireAfter(
+        "maturity", maturity, end, time, time == 0 ? "today" : "settlement or expiry");
+    if (end > LONGEST_YEARS) {
+      throw new IllegalArgumentException(
+          "maturity must lie within " + LONGEST_YEARS + " years, found " + maturity);
+    }
+    int n = countAfter(time, axis);
+    double[] times = new double[n];
+    double[] amounts = new double[n];
+    for (int i = 0; i < n; i++) {
+      int back = n - 1 - i;
+      times[i] = couponTime(back, axis);
+      amounts[i] = coupon(back, axis);
+    }
+    amounts[n - 1] += redemption;
+    return CashFlows.of(times, amounts);
+  }
+
+  /** How many coupons fall after a time; one on it belongs to the past. */
+  private int countAfter(double time, TimeAxis axis) {
+    int n = 0;
+    while (couponTime(n, axis) > time + TimeAxis.SAME_MOMENT) {
+      n++;
+    }
+    return n;
+  }
+
+  private double couponTime(int back, TimeAxis axis) {
+    return axis.isDated(maturity)
+        ? axis.years(dates(axis).before(back))
+        : axis.years(maturity) - (double) back / frequency;
+  }
+
+  private CouponDates dates(TimeAxis axis) {
+    return new CouponDates(axis.date(maturity), 12 / frequency);
+  }
+
+  /** The coupon paid {@code back} periods before maturity, per 100 face. */
+  private double coupon(int back, TimeAxis axis) {
+    if (!axis.isDated(maturity) || dayCount == DayCount.ACT_ACT_ICMA) {
+      return 100 * coupon / frequency;
+    }
+    CouponDates dates = dates(axis);
+    return 100 * coupon * days(dates.before(back + 1), dates.before(back)) / 365.0;
+  }
+
+  /** Accrued interest at a time, per 100 face. */
+  double accrued(double time, TimeAxis axis) {
+    int n = countAfter(time, axis);
+    if (axis.isDated(maturity) && dayCount == DayCount.ACT_365F) {
+      LocalDate start = dates(axis).before(n);
+      return 100 * coupon * days(start, dateAt(time, axis)) / 365.0;
+    }
+    return 100 * coupon / frequency * (1 - toNext(time, n, axis));
+  }
+
+  /** Fraction of a period from a time to the first of {@code n} coupons after it. */
+  private double toNext(double time, int n, TimeAxis axis) {
+    if (!axis.isDated(maturity)) {
+      double periods = (couponTime(n - 1, axis) - time) * frequency;
+      // A coupon just now belongs to the past, so a whole period is left, to the last bit.
+      return Math.abs(periods - 1) <= frequency * TimeAxis.SAME_MOMENT ? 1 : periods;
+    }
+    CouponDates dates = dates(axis);
+    LocalDate next = dates.before(n - 1);
+    return days(dateAt(time, axis), next) / (double) days(dates.before(n), next);
+  }
+
+  private static LocalDate dateAt(double time, TimeAxis axis) {
+    return axis.asOf()
+        .orElseThrow()
+        .plusDays(Math.round(time / axis.years(axis.asOf().orElseThrow().plusDays(1))));
+  }
+
+  private static long days(LocalDate from, LocalDate to) {
+    return ChronoUnit.DAYS.between(from, to);
+  }
+
+  /** The flows after settlement in coupon periods, for price and yield. */
+  public PeriodFlows periodFlows(TimeAxis axis) {
+    Claim claim = claim(axis);
+    int n = claim.flows().size();
+    return new PeriodFlows(frequency, toNext(claim.settlement(), n, axis), claim.flows().amounts());
+  }
+}

@@ -1,0 +1,34 @@
+package ebbline.instrument;
+
+import java.util.Collections;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import java.util.Objects;
+import java.util.OptionalDouble;
+
+/**
+ * A position: an instrument, how much of it, and what the market quotes.
+ *
+ * @param id unique label
+ * @param face money; negative is short
+ * @param price quoted clean price per 100, if given
+ * @param yield quoted yield, a decimal, if given
+ * @param carried the book's own columns {@code x-…}, in order
+ */
+public record BookRow(
+    String id,
+    Instrument instrument,
+    double face,
+    OptionalDouble price,
+    OptionalDouble yield,
+    Map<String, String> carried) {
+
+  public BookRow {
+    Objects.requireNonNull(id, "id");
+    Objects.requireNonNull(instrument, "instrument");
+    if (!Double.isFinite(face)) {
+      throw new IllegalArgumentException("face must be finite, found " + face);
+    }
+    carried = Collections.unmodifiableMap(new LinkedHashMap<>(carried));
+  }
+}

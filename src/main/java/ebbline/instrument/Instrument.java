@@ -1,0 +1,18 @@
+package ebbline.instrument;
+
+import ebbline.time.TimeAxis;
+
+/** What is owed, when, and who may choose: terms without prices. */
+public sealed interface Instrument permits Bond, ZeroBond, ZeroOption, BondOption {
+
+  /** The name of the kind as books write it. */
+  String kind();
+
+  /**
+   * The terms in years from today: here dates end.
+   *
+   * @throws IllegalArgumentException in words if the terms make no sense on this axis (matured,
+   *     expired, a date without an as-of date)
+   */
+  Claim claim(TimeAxis axis);
+}

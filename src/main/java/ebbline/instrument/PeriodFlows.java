@@ -1,0 +1,48 @@
+package ebbline.instrument;
+
+/**
+ * The flows of a bond still to come, counted in coupon periods from settlement: what price and
+ * yield are made of. One flow a period, per 100 face.
+ */
+public final class PeriodFlows {
+  private final int frequency;
+  private final double toFirst;
+  private final double[] amounts;
+
+  /**
+   * Takes what a bond still pays.
+   *
+   * @param frequency periods a year
+   * @param toFirst fraction of a period from settlement to the first flow, above 0, at most 1
+   * @param amounts one a period; not empty
+   */
+  PeriodFlows(int frequency, double toFirst, double[] amounts) {
+    if (!(toFirst > 0 && toFirst <= 1) || amounts.length == 0) {
+      throw new IllegalArgumentException(
+          "a bond's next flow lies within a period after settlement, found "
+              + toFirst
+              + " periods and "
+              + amounts.length
+              + " flows");
+    }
+    this.frequency = frequency;
+    this.toFirst = toFirst;
+    this.amounts = amounts.clone();
+  }
+
+  public int frequency() {
+    return frequency;
+  }
+
+  public double toFirst() {
+    return toFirst;
+  }
+
+  public int size() {
+    return amounts.length;
+  }
+
+  public double amount(int i) {
+    return amounts[i];
+  }
+}

@@ -1,0 +1,131 @@
+package ebbline.data;
+
+import ebbline.time.InputProblem;
+import ebbline.time.Moment;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.Function;
+
+/**
+ * One row of a table, read cell by cell; whatever is wrong is added to the problems, with its
+ * place.
+ */
+final class CsvRow {
+  private final String source;
+  private final int line;
+  private final List<Column> columns;
+  private final String[] cells;
+  private final List<InputProblem> problems;
+
+  CsvRow(
+      String source, int line, List<Column> columns, String[] cells, List<InputProblem> problems) {
+    this.source = source;
+    this.line = line;
+    this.columns = columns;
+    this.cells = cells;
+    this.problems = problems;
+  }
+
+  /** The same row with its own list of problems. */
+  CsvRow collecting(List<InputProblem> own) {
+    return new CsvRow(source, line, columns, cells, own);
+  }
+
+  int line() {
+    return line;
+  }
+
+  String source() {
+    return source;
+  }
+
+  List<Column> columns() {
+    return columns;
+  }
+
+  List<InputProblem> problems() {
+    return problems;
+  }
+
+  /** The cell without blanks around it; empty where the column or the value is not given. */
+  Optional<String> text(String name) {
+    for (int i = 0; i < columns.size(); i++) {
+      if (columns.get(i).name().equals(name)) {
+        return cell(i);
+      }
+    }
+    return Optional.empty();
+  }
+
+  Optional<String> cell(int column) {
+    String text = cells[column].strip();
+    return text.isEmpty() ? Optional.empty() : Optional.of(text);
+  }
+
+  /** The cell as it stands, for columns that are carried through. */
+  String raw(int column) {
+    return cells[column];
+  }
+
+  boolean has(String name) {
+    return text(name).isPresent();
+  }
+
+  /** A problem of this row. */
+  void problem(String column, String value, String expected) {
+    problems.add(new InputProblem(source, line, heading(column), value, expected));
+  }
+
+  private String heading(String name) {
+    return columns.stream()
+        .filter(c -> c.name().equals(name))
+        .map(Column::heading)
+        .findFirst()
+        .orElse(name);
+  }
+
+  /** A value that the reader turns into something, or a problem with the reader's words. */
+  <T> Optional<T> value(String name, Function<String, T> reader) {
+    Optional<String> text = text(name);
+    if (text.isEmpty()) {
+      return Optional.empty();
+    }
+    try {
+      return Optional.of(reader.apply(text.get()));
+    } catch (IllegalArgumentException e) {
+      problem(name, text.get(), e.getMessage());
+      return Optional.empty();
+    }
+  }
+
+  OptionalDouble number(String name) {
+    return asDouble(value(name, NumberText::parse));
+  }
+
+  OptionalDouble rate(String name) {
+    RateText.Unit unit =
+        columns.stream()
+            .filter(c -> c.name().equals(name))
+            .map(Column::unit)
+            .findFirst()
+            .orElse(RateText.Unit.WRITTEN);
+    return asDouble(value(name, text -> RateText.parse(text, unit)));
+  }
+
+  Optional<Moment> moment(String name) {
+    return value(name, Moment::parse);
+  }
+
+  /** A value that must be there. */
+  <T> Optional<T> required(String name, Optional<T> value) {
+    if (value.isEmpty() && !has(name)) {
+      problem(name, "", "a value is missing");
+    }
+    return value;
+  }
+
+  private static OptionalDouble asDouble(Optional<Double> value) {
+    return value.isPresent() ? OptionalDouble.of(value.get()) : OptionalDouble.empty();
+  }
+}

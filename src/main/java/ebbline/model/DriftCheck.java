@@ -1,6 +1,5 @@
 package ebbline.model;
 
-import ebbline.curve.DiscountCurve;
 import java.util.Arrays;
 
 /**
@@ -22,17 +21,36 @@ public record DriftCheck(double worst, double at, int points) {
   }
 
   /**
+   * At other times.
+   *
    * @param times positive and increasing, years
    */
   public static DriftCheck at(GaussianRates rates, double[] times) {
-    DiscountCurve curve = rates.curve();
+    double[] logs = logDiscounts(rates, times);
+    double worst = 0;
+    double where = 0;
+    for (int i = 0; i < times.length; i++) {
+      double error = Math.abs(Math.expm1(logs[i] - rates.curve().logDiscount(times[i])));
+      if (!(error <= worst)) {
+        worst = error;
+        where = times[i];
+      }
+    }
+    return new DriftCheck(worst, where, times.length);
+  }
+
+  /**
+   * ln P_model at each time, by way of the drift.
+   *
+   * @param times positive and increasing, years
+   */
+  public static double[] logDiscounts(GaussianRates rates, double[] times) {
     double[] stops = stops(rates, times);
+    double[] logs = new double[times.length];
     GaussLegendre rule = GaussLegendre.of(RULE);
     double integral = 0;
     double carry = 0;
     double from = 0;
-    double worst = 0;
-    double where = 0;
     int next = 0;
     for (double to : stops) {
       int panels =
@@ -47,16 +65,10 @@ public record DriftCheck(double worst, double at, int points) {
       }
       from = to;
       if (next < times.length && times[next] == to) {
-        double log = 0.5 * rates.integralVariance(0, to) - integral;
-        double error = Math.abs(Math.expm1(log - curve.logDiscount(to)));
-        if (!(error <= worst)) {
-          worst = error;
-          where = to;
-        }
-        next++;
+        logs[next++] = 0.5 * rates.integralVariance(0, to) - integral;
       }
     }
-    return new DriftCheck(worst, where, times.length);
+    return logs;
   }
 
   /** Every time at which the integrand may have a kink, and the times themselves. */

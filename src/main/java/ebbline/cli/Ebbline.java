@@ -5,19 +5,68 @@ import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Spec;
 
-/** The root command. */
-@Command(name = "ebbline", mixinStandardHelpOptions = true, version = "ebbline 0.1.0")
+/** The root command: names the others and says what none of them is. */
+@Command(
+    name = "ebbline",
+    mixinStandardHelpOptions = true,
+    versionProvider = Version.class,
+    sortOptions = false,
+    description = {
+      "Discount curves, the Vasicek and Hull-White short-rate models, bonds and rate options: builds,"
+          + " fits, prices, and proves every number against published examples and a second method.",
+      ""
+    },
+    footer = {
+      "",
+      "A calculation aid, not advice: local rules and your own licensed and independent review"
+          + " prevail.",
+      "",
+      "Examples (from the project's root):",
+      "  ebbline price --curve curves/saltmere.csv --book examples/book.csv",
+      "  ebbline verify --topic Vasicek"
+    },
+    subcommands = {
+      CurveCommand.class,
+      CalibrateCommand.class,
+      PriceCommand.class,
+      VerifyCommand.class
+    })
 final class Ebbline implements Runnable {
+  @Spec private CommandSpec spec;
+
   private Ebbline() {}
 
+  /** Without a command there is nothing to do, so the help is shown as an answer to a mistake. */
   @Override
-  public void run() {}
+  public void run() {
+    throw new UsageProblem(
+        "a command is missing: one of " + String.join(", ", spec.subcommands().keySet()));
+  }
 
+  /**
+   * Runs one command line.
+   *
+   * @param out where results go
+   * @param err where everything else goes
+   * @return the exit status
+   */
   static int run(String[] args, PrintStream out, PrintStream err) {
     CommandLine line = new CommandLine(new Ebbline());
-    line.setOut(new PrintWriter(out, true, StandardCharsets.UTF_8));
+    line.setOut(new PrintWriter(out, false, StandardCharsets.UTF_8));
     line.setErr(new PrintWriter(err, true, StandardCharsets.UTF_8));
-    return line.execute(args);
+    line.setCaseInsensitiveEnumValuesAllowed(true);
+    line.setAbbreviatedOptionsAllowed(false);
+    line.setParameterExceptionHandler(new Complaints());
+    line.setExecutionExceptionHandler(new Complaints());
+    int status = line.execute(args);
+    line.getOut().flush();
+    if (out.checkError()) {
+      line.getErr().println("ebbline: error: standard output could not be written");
+      return ExitStatus.OUTPUT.code();
+    }
+    return status;
   }
 }

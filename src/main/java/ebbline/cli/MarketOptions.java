@@ -1,0 +1,73 @@
+package ebbline.cli;
+
+import ebbline.curve.Interpolation;
+import ebbline.data.CurveFile;
+import ebbline.data.CurveInput;
+import ebbline.time.Moment;
+import java.time.LocalDate;
+import java.util.Optional;
+import java.util.function.Function;
+import picocli.CommandLine.Option;
+
+/** Today's date and curve; the same options in every command. */
+final class MarketOptions {
+  @Option(
+      names = "--as-of",
+      paramLabel = "DATE",
+      description = "today, 2026-11-30; overrides the curve file's own date")
+  private String asOf;
+
+  @Option(
+      names = "--curve",
+      paramLabel = "FILE|flat:RATE",
+      description = "discount curve: a CSV file, or one continuous rate such as flat:5%%")
+  private String curve;
+
+  @Option(
+      names = "--interpolation",
+      paramLabel = "NAME",
+      description =
+          "log-linear, linear-zero, cubic or monotone-convex; overrides the curve file's own")
+  private String interpolation;
+
+  Optional<LocalDate> asOf() {
+    return read(
+        "--as-of",
+        asOf,
+        text -> {
+          if (Moment.parse(text) instanceof Moment.OnDate on) {
+            return on.date();
+          }
+          throw new IllegalArgumentException("expected a date such as 2026-11-30");
+        });
+  }
+
+  boolean hasCurve() {
+    return curve != null;
+  }
+
+  /** The curve with what the command line overrides; a command that needs one says so before. */
+  CurveInput curve() {
+    if (curve == null) {
+      throw new UsageProblem("--curve FILE is missing: the discount curve to work on");
+    }
+    Optional<Interpolation> named = read("--interpolation", interpolation, Interpolation::of);
+    if (curve.startsWith("flat:") && named.isPresent()) {
+      throw UsageProblem.of(
+          "--interpolation", interpolation, "a flat curve has no nodes to interpolate");
+    }
+    return CurveFile.read(curve, asOf(), named);
+  }
+
+  /** The text of an option turned into something, with the reader's words where it cannot be. */
+  static <T> Optional<T> read(String option, String text, Function<String, T> reader) {
+    if (text == null) {
+      return Optional.empty();
+    }
+    try {
+      return Optional.of(reader.apply(text));
+    } catch (IllegalArgumentException e) {
+      throw UsageProblem.of(option, text, e.getMessage());
+    }
+  }
+}

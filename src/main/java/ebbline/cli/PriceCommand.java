@@ -1,0 +1,173 @@
+package ebbline.cli;
+
+import ebbline.data.BookEntry;
+import ebbline.data.BookFile;
+import ebbline.data.CurveInput;
+import ebbline.data.ModelInput;
+import ebbline.data.RowText;
+import ebbline.data.SourceFile;
+import ebbline.instrument.BookRow;
+import ebbline.pricing.Market;
+import ebbline.pricing.Method;
+import ebbline.pricing.PricedRow;
+import ebbline.pricing.RowPricer;
+import ebbline.report.OutputFormat;
+import ebbline.report.PriceReport;
+import ebbline.report.ResultRow;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.concurrent.Callable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Option;
+
+/** Prices a book. */
+@Command(
+    name = "price",
+    mixinStandardHelpOptions = true,
+    versionProvider = Version.class,
+    sortOptions = false,
+    description = {
+      "Prices a book of bonds and options from a curve or a model, each row with its method and the"
+          + " bound of its numerical error. A row that cannot be priced is reported in its place"
+          + " (exit status 1)."
+    },
+    footer = {
+      "",
+      "A calculation aid, not advice: local rules and your own licensed and independent review"
+          + " prevail.",
+      "",
+      "Examples (from the project's root):",
+      "  ebbline price --model hull-white --mean-reversion 0.05 --volatility 0.9%% --curve"
+          + " curves/saltmere.csv --book examples/book.csv",
+      "  ebbline price --model vasicek --short-rate 5%% --long-run-mean 8%% --mean-reversion 0.1"
+          + " --volatility 1.5%% --row 'instrument=zero-option kind=call expiry=1 maturity=3"
+          + " strike=87' --format json"
+    })
+final class PriceCommand implements Callable<Integer> {
+  @Mixin private MarketOptions market;
+  @Mixin private ModelOptions model;
+
+  @Option(names = "--book", paramLabel = "FILE", description = "the book, one instrument a row")
+  private String book;
+
+  @Option(
+      names = "--row",
+      paramLabel = "'KEY=VALUE …'",
+      description =
+          "one row typed here, with the book's columns as keys; values with blanks in double"
+              + " quotes; repeatable")
+  private List<String> rows = List.of();
+
+  @Option(
+      names = "--method",
+      paramLabel = "NAME",
+      defaultValue = "auto",
+      description = "auto (default: the most accurate that applies) or closed-form")
+  private String method;
+
+  @Option(
+      names = "--explain",
+      paramLabel = "ID",
+      description = "show the flows of the row with this id, their discount factors and values")
+  private String explain;
+
+  @Mixin private OutputOptions output;
+
+  private boolean failed;
+  private boolean explained;
+
+  @Override
+  public Integer call() {
+    if (book == null && rows.isEmpty()) {
+      throw new UsageProblem("nothing to price: give --book FILE or --row 'KEY=VALUE …'");
+    }
+    Optional<BookFile> file = Optional.ofNullable(book).map(BookFile::open);
+    Optional<Method> wanted = method();
+    List<Optional<SourceFile>> files = new ArrayList<>();
+    Market priced = market(files);
+    file.ifPresent(f -> files.add(Optional.of(f.file())));
+    RowPricer pricer = new RowPricer(priced, wanted);
+    List<ResultRow> results = new ArrayList<>();
+    file.ifPresent(f -> f.forEach(entry -> results.addAll(results(entry, pricer, priced))));
+    int number = results.size();
+    for (String row : rows) {
+      results.addAll(results(entry(row, ++number), pricer, priced));
+    }
+    if (explain != null && !explained) {
+      throw UsageProblem.of("--explain", explain, "no row of this run has this id");
+    }
+    List<String> carried = file.map(BookFile::carried).orElse(List.of());
+    boolean flowsOnly = explain != null && output.format() == OutputFormat.CSV;
+    output.write(
+        Inputs.envelope(
+            "price", priced.axis(), files, flowsOnly ? List.of() : PriceReport.columns(carried)),
+        results);
+    if (failed) {
+      output.note("some rows could not be priced; their message says why");
+    }
+    return (failed ? ExitStatus.CHECK_FAILED : ExitStatus.DONE).code();
+  }
+
+  private Optional<Method> method() {
+    if (method.equals("auto")) {
+      return Optional.empty();
+    }
+    for (Method known : List.of(Method.CLOSED_FORM)) {
+      if (known.label().equals(method.toLowerCase(Locale.ROOT))) {
+        return Optional.of(known);
+      }
+    }
+    throw UsageProblem.of("--method", method, "expected auto or closed-form");
+  }
+
+  private Market market(List<Optional<SourceFile>> files) {
+    Optional<ModelInput> named = model.model(market);
+    if (named.isPresent()) {
+      files.add(named.get().file());
+      return Market.of(named.get().axis(), named.get().rates());
+    }
+    if (!market.hasCurve()) {
+      throw new UsageProblem("give --curve FILE or --model: what should the rows be priced from?");
+    }
+    CurveInput curve = market.curve();
+    files.add(curve.file());
+    return Market.of(curve.axis(), curve.curve());
+  }
+
+  private static BookEntry entry(String row, int number) {
+    try {
+      return RowText.parse(row, "--row", number);
+    } catch (IllegalArgumentException e) {
+      throw new UsageProblem("--row: " + e.getMessage());
+    }
+  }
+
+  private List<ResultRow> results(BookEntry entry, RowPricer pricer, Market priced) {
+    if (entry instanceof BookEntry.Bad bad) {
+      failed = true;
+      explained |= bad.id().equals(explain);
+      return explain != null && output.format() == OutputFormat.CSV
+          ? List.of()
+          : List.of(
+              PriceReport.result(
+                      PricedRow.failed(bad.id(), bad.instrument(), bad.message()), bad.carried())
+                  .build());
+    }
+    BookRow row = ((BookEntry.Good) entry).row();
+    PricedRow result = pricer.price(row);
+    failed |= result.hasFailed();
+    boolean explains = row.id().equals(explain);
+    explained |= explains;
+    if (explain != null && output.format() == OutputFormat.CSV) {
+      return explains && !result.hasFailed() ? FlowReport.flows(row, priced) : List.of();
+    }
+    ResultRow.Builder built = PriceReport.result(result, row.carried());
+    if (explains && !result.hasFailed()) {
+      FlowReport.explain(built, row, priced);
+    }
+    return List.of(built.build());
+  }
+}

@@ -27,24 +27,24 @@ class PanelEstimatorTest {
     PanelEstimate.Best best = estimate.best();
     PanelParameters found = best.parameters();
     assertThat(best.logLikelihood()).isCloseTo(Panels.reference(set, "loglik"), within(2e-9));
-    check(found.meanReversion(), set, "params.kappa", 1e-8);
-    check(found.longRunMean(), set, "params.theta", 1e-8);
-    check(found.volatility(), set, "params.sigma", 1e-8);
-    check(found.marketPriceOfRisk(), set, "params.lambda_", 1e-8);
-    check(found.measurementSd(), set, "params.h", 1e-8);
-    check(found.pricingMean(), set, "params.thetaQ", 1e-8);
+    check(found.meanReversion(), set, "params.kappa", 3e-9);
+    check(found.longRunMean(), set, "params.theta", 3e-9);
+    check(found.volatility(), set, "params.sigma", 3e-9);
+    check(found.marketPriceOfRisk(), set, "params.lambda_", 3e-9);
+    check(found.measurementSd(), set, "params.h", 3e-9);
+    check(found.pricingMean(), set, "params.thetaQ", 3e-9);
     PanelErrors errors = best.errors();
-    check(errors.meanReversion().orElseThrow(), set, "se_observed_info.kappa", 1e-7);
-    check(errors.longRunMean().orElseThrow(), set, "se_observed_info.theta", 1e-7);
-    check(errors.volatility().orElseThrow(), set, "se_observed_info.sigma", 1e-7);
-    check(errors.marketPriceOfRisk().orElseThrow(), set, "se_observed_info.lambda_", 1e-7);
-    check(errors.measurementSd().orElseThrow(), set, "se_observed_info.h", 1e-7);
+    check(errors.meanReversion().orElseThrow(), set, "se_observed_info.kappa", 3e-9);
+    check(errors.longRunMean().orElseThrow(), set, "se_observed_info.theta", 3e-9);
+    check(errors.volatility().orElseThrow(), set, "se_observed_info.sigma", 3e-9);
+    check(errors.marketPriceOfRisk().orElseThrow(), set, "se_observed_info.lambda_", 3e-9);
+    check(errors.measurementSd().orElseThrow(), set, "se_observed_info.h", 3e-9);
     int last = best.rates().size() - 1;
-    check(best.rates().rate(0), set, "filtered_r_first", 1e-8);
-    check(best.rates().rate(last), set, "filtered_r_last", 1e-8);
-    check(Math.pow(best.rates().sd(last), 2), set, "filtered_var_last", 1e-8);
+    check(best.rates().rate(0), set, "filtered_r_first", 3e-9);
+    check(best.rates().rate(last), set, "filtered_r_last", 3e-9);
+    check(Math.pow(best.rates().sd(last), 2), set, "filtered_var_last", 3e-9);
     for (int j = 0; j < Panels.COLUMNS.length; j++) {
-      check(best.rates().rmse(j) * 1e4, set, "fit_rmse_bp." + Panels.COLUMNS[j], 1e-8);
+      check(best.rates().rmse(j) * 1e4, set, "fit_rmse_bp." + Panels.COLUMNS[j], 3e-9);
     }
     if (set.equals("p8_full")) {
       assertThat(best.warnings())

@@ -90,4 +90,28 @@ class ParametricCurveTest {
     assertThatThrownBy(() -> Compounding.ANNUAL.discount(-1, 1)).hasMessageContaining("annual");
     assertThatThrownBy(() -> Compounding.of("weekly")).hasMessageContaining("semi-annual");
   }
+
+  @Test
+  void tausOfAnySizeLeaveFiniteFigures() {
+    for (double tau : new double[] {1e-300, 1e-9, 1e9, 1e300}) {
+      SvenssonCurve curve = SvenssonCurve.of(0.03, -0.01, 0.02, 0.01, tau, tau);
+      for (double t : new double[] {0, 1e-300, 1, 800 * Math.min(tau, 1e6), 1000}) {
+        assertThat(curve.zero(t)).isFinite();
+        assertThat(curve.logDiscount(t)).isFinite();
+        assertThat(curve.forward(t)).isFinite();
+      }
+      assertThat(curve.forwardSlope(1)).isFinite();
+    }
+    assertThat(SvenssonCurve.of(0.03, -0.01, 0.02, 0.01, 1e-300, 1e-300).zero(1)).isEqualTo(0.03);
+  }
+
+  @Test
+  void ratesThatNoDiscountFactorHasAreRefused() {
+    assertThatThrownBy(() -> Compounding.SIMPLE.logDiscount(-0.5, 2))
+        .hasMessageContaining("found -0.5 over 2.0 years");
+    assertThat(Compounding.SIMPLE.logDiscount(-0.5, 1.99)).isPositive();
+    assertThatThrownBy(() -> Compounding.CONTINUOUS.logDiscount(Double.NaN, 2))
+        .hasMessageContaining("NaN");
+    assertThatThrownBy(() -> Compounding.ANNUAL.rate(-0.1, 0)).hasMessageContaining("above 0");
+  }
 }

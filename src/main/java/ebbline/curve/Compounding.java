@@ -77,6 +77,15 @@ public enum Compounding {
     return Math.exp(logDiscount(rate, t));
   }
 
+  /** ∂P/∂rate at a rate; see {@link #logDiscount}. */
+  public double discountSlope(double rate, double t) {
+    double discount = discount(rate, t);
+    if (periods == 0) {
+      return -t * discount;
+    }
+    return -t * discount / (1 + (periods < 0 ? rate * t : rate / periods));
+  }
+
   /**
    * The rate of ln P(0,t), decimal per year.
    *

@@ -20,7 +20,13 @@ final class Complaints implements IParameterExceptionHandler, IExecutionExceptio
   public int handleParseException(ParameterException problem, String[] args) {
     CommandLine command = problem.getCommandLine();
     PrintWriter err = command.getErr();
-    err.println("ebbline: error: " + firstLine(problem.getMessage()));
+    if (problem instanceof UnmatchedArgumentException unmatched
+        && command.getParent() == null
+        && !unmatched.isUnknownOption()) {
+      err.println("ebbline: error: there is no command '" + unmatched.getUnmatched().get(0) + "'");
+    } else {
+      err.println("ebbline: error: " + firstLine(problem.getMessage()));
+    }
     if (problem instanceof UnmatchedArgumentException unmatched) {
       List<String> nearest = unmatched.getSuggestions();
       if (!nearest.isEmpty()) {

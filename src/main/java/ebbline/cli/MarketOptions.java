@@ -3,6 +3,8 @@ package ebbline.cli;
 import ebbline.curve.Interpolation;
 import ebbline.data.CurveFile;
 import ebbline.data.CurveInput;
+import ebbline.time.InputProblem;
+import ebbline.time.InputProblems;
 import ebbline.time.Moment;
 import java.time.LocalDate;
 import java.util.Optional;
@@ -56,7 +58,15 @@ final class MarketOptions {
       throw UsageProblem.of(
           "--interpolation", interpolation, "a flat curve has no nodes to interpolate");
     }
-    return CurveFile.read(curve, asOf(), named);
+    try {
+      return CurveFile.read(curve, asOf(), named);
+    } catch (InputProblems e) {
+      if (curve.startsWith("flat:")) {
+        InputProblem problem = e.problems().get(0);
+        throw UsageProblem.of("--curve " + curve, problem.value(), problem.expected());
+      }
+      throw e;
+    }
   }
 
   /** The text of an option turned into something, with the reader's words where it cannot be. */

@@ -8,6 +8,8 @@ import ebbline.data.RateText;
 import ebbline.model.HullWhite;
 import ebbline.model.Vasicek;
 import ebbline.model.VolatilitySteps;
+import ebbline.time.InputProblem;
+import ebbline.time.InputProblems;
 import ebbline.time.TimeAxis;
 import java.util.ArrayList;
 import java.util.List;
@@ -147,11 +149,14 @@ final class ModelOptions {
     }
     ModelInput read = ModelFile.read(model);
     if (read.measure() == ModelInput.Measure.HISTORICAL) {
-      throw new UsageProblem(
-          "--model: "
-              + model
-              + " holds a model under the historical measure, which gives no prices; use one that"
-              + " calibrate wrote");
+      throw InputProblems.of(
+          new InputProblem(
+              model,
+              0,
+              "",
+              "historical",
+              "a model under the historical measure gives no prices; use one that calibrate"
+                  + " wrote"));
     }
     if (market.asOf().isPresent() && !market.asOf().equals(read.axis().asOf())) {
       if (read.axis().asOf().isPresent()) {

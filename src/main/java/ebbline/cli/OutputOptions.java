@@ -25,6 +25,7 @@ final class OutputOptions {
       names = "--format",
       paramLabel = "FORMAT",
       defaultValue = "table",
+      converter = FormatName.class,
       description = "table (default), csv or json; csv and json give every digit")
   private OutputFormat format;
 

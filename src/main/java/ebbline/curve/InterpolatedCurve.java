@@ -1,6 +1,5 @@
 package ebbline.curve;
 
-import java.util.Arrays;
 import java.util.Objects;
 
 /**
@@ -30,23 +29,21 @@ public final class InterpolatedCurve implements DiscountCurve {
     this.times = times;
     this.logs = logs;
     scheme = Scheme.of(interpolation, times, logs);
-    double[] numbers = scheme.pieces().numbers();
-    pieces = Arrays.copyOf(numbers, numbers.length + 1);
-    pieces[numbers.length] = Double.POSITIVE_INFINITY; // no piece begins there: the search stops
+    pieces = scheme.pieces().numbers();
     straight = interpolation == Interpolation.LOG_LINEAR;
     // A table of equal cells leads to the piece in a step or two, however many pieces there are.
-    int count = numbers.length / WIDTH;
+    int count = pieces.length / WIDTH;
     int cells = Math.min(MOST_CELLS, CELLS_PER_PIECE * count);
     cellsPerYear = cells / times[times.length - 1];
     firstPiece = new int[cells + 1];
     int at = 0;
     for (int cell = 0; cell <= cells; cell++) {
-      while (pieces[at + WIDTH] <= cell / cellsPerYear) {
+      while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= cell / cellsPerYear) {
         at += WIDTH;
       }
       firstPiece[cell] = Math.max(0, at - WIDTH); // one early: rounding of the cell cannot skip
     }
-    for (double number : numbers) {
+    for (double number : pieces) {
       if (!Double.isFinite(number)) {
         throw new IllegalArgumentException(
             "nodes must leave finite forwards; they lie too close together or too far from 1");
@@ -84,10 +81,7 @@ public final class InterpolatedCurve implements DiscountCurve {
   /** Where the piece that holds t begins in the array. */
   private int piece(double t) {
     int at = firstPiece[Math.min((int) (t * cellsPerYear), firstPiece.length - 1)];
-    // Two steps without a branch to guess wrong; more only where pieces are shorter than a cell.
-    at += pieces[at + WIDTH] <= t ? WIDTH : 0;
-    at += pieces[at + WIDTH] <= t ? WIDTH : 0;
-    while (pieces[at + WIDTH] <= t) {
+    while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= t) {
       at += WIDTH;
     }
     return at;

@@ -19,8 +19,8 @@ public enum PriceFigure {
   MODIFIED_DURATION("modified_duration", Unit.YEARS),
   /** P″/P in the yield, years². */
   CONVEXITY("convexity", Unit.YEARS),
-  /** Money gained when yields fall by one basis point, two-sided, for the row's face. */
-  DV01("dv01", Unit.MONEY),
+  /** Price gained when the yield falls by one basis point, two-sided, per 100. */
+  DV01("dv01", Unit.PRICE),
   /** Continuous spread over the curve's zero rates. */
   Z_SPREAD("z_spread", Unit.RATE),
   /** Par-par asset-swap spread over the curve. */

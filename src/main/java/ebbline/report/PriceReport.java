@@ -48,7 +48,7 @@ public final class PriceReport {
 
   private static Cell cell(PriceFigure figure, double value) {
     return switch (figure.unit()) {
-      case MONEY -> new Cell.Amount(value, 2);
+      case MONEY -> new Cell.Amount(value, Math.abs(value) < 1000 ? 6 : 2);
       case PRICE -> new Cell.Amount(value, 6);
       case YEARS -> new Cell.Amount(value, 4);
       case RATE -> new Cell.Rate(value);

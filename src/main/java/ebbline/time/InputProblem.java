@@ -9,7 +9,8 @@ import java.util.Objects;
  *
  * @param source file path as the user gave it, or the name of an option
  * @param line line of the file, counted from 1; 0 where lines mean nothing
- * @param column column name (CSV), member path (JSON) or character position; empty where unknown
+ * @param column column name (CSV), or the number of a character in its line (JSON); empty where
+ *     unknown
  * @param value the offending text; empty where nothing was found
  * @param expected what is wrong and how to mend it, one sentence without the place
  */
@@ -22,14 +23,21 @@ public record InputProblem(String source, int line, String column, String value,
     Objects.requireNonNull(expected, "expected");
   }
 
-  /** The problem as one line, {@code file:line: column 'x': found 'y': expected …}. */
+  /**
+   * The problem as one line, {@code file:line: column 'x': found 'y': expected …} or, where the
+   * column is a number, {@code file:line:column: found 'y': expected …}.
+   */
   public String message() {
     StringBuilder text = new StringBuilder(source);
+    boolean numbered = !column.isEmpty() && column.chars().allMatch(Character::isDigit);
     if (line > 0) {
       text.append(':').append(line);
+      if (numbered) {
+        text.append(':').append(column);
+      }
     }
     text.append(": ");
-    if (!column.isEmpty()) {
+    if (!column.isEmpty() && !numbered) {
       text.append("column '").append(column).append("': ");
     }
     if (!value.isEmpty()) {

@@ -3,10 +3,6 @@ package ebbline.fitting;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import org.apache.commons.math3.linear.Array2DRowRealMatrix;
-import org.apache.commons.math3.linear.ArrayRealVector;
-import org.apache.commons.math3.linear.RealMatrix;
-import org.apache.commons.math3.linear.SingularValueDecomposition;
 
 /**
  * Starts of the search. For a given mean reversion the zero rates are linear in (b, σ², r₀), so the
@@ -99,7 +95,7 @@ final class VasicekStarts {
     int n = problem.size();
     int columns = (driftIsFree ? 1 : 0) + (volatility == null ? 1 : 0) + (heldRate == null ? 1 : 0);
     double[] right = new double[n];
-    RealMatrix matrix = new Array2DRowRealMatrix(Math.max(n, 1), Math.max(columns, 1));
+    double[][] matrix = new double[columns][n];
     for (int i = 0; i < n; i++) {
       double tau = problem.time(i);
       VasicekZero zero = VasicekZero.at(meanReversion * tau);
@@ -113,30 +109,71 @@ final class VasicekStarts {
       }
       int j = 0;
       if (driftIsFree) {
-        matrix.setEntry(i, j++, byDrift);
+        matrix[j++][i] = byDrift;
       }
       if (volatility == null) {
-        matrix.setEntry(i, j++, byVariance);
+        matrix[j++][i] = byVariance;
       } else {
         right[i] -= volatility * volatility * byVariance;
       }
       if (heldRate == null) {
-        matrix.setEntry(i, j, byRate);
+        matrix[j][i] = byRate;
       } else {
         right[i] -= heldRate * byRate;
       }
     }
-    double[] solution =
-        columns == 0
-            ? new double[0]
-            : new SingularValueDecomposition(matrix)
-                .getSolver()
-                .solve(new ArrayRealVector(right, false))
-                .toArray();
+    double[] solution = solve(matrix, right);
     int j = 0;
     double drift = driftIsFree ? solution[j++] : 0;
     double variance = volatility == null ? solution[j++] : volatility * volatility;
     double rate = heldRate == null ? solution[j] : heldRate;
     return new double[] {drift, variance, rate};
+  }
+
+  /**
+   * Least squares over at most three columns by modified Gram-Schmidt; a column that the ones
+   * before make up gets 0. Overwrites both.
+   */
+  private static double[] solve(double[][] columns, double[] right) {
+    int count = columns.length;
+    double[][] upper = new double[count][count + 1];
+    for (int j = 0; j < count; j++) {
+      double before = dot(columns[j], columns[j]);
+      for (int k = 0; k < j; k++) {
+        upper[k][j] = dot(columns[k], columns[j]);
+        subtract(columns[j], columns[k], upper[k][j]);
+      }
+      double length = Math.sqrt(dot(columns[j], columns[j]));
+      boolean counts = length > 1e-12 * Math.sqrt(before);
+      upper[j][j] = counts ? length : 0;
+      for (int i = 0; i < right.length; i++) {
+        columns[j][i] = counts ? columns[j][i] / length : 0;
+      }
+      upper[j][count] = dot(columns[j], right);
+      subtract(right, columns[j], upper[j][count]);
+    }
+    double[] solution = new double[count];
+    for (int j = count - 1; j >= 0; j--) {
+      double rest = upper[j][count];
+      for (int k = j + 1; k < count; k++) {
+        rest -= upper[j][k] * solution[k];
+      }
+      solution[j] = upper[j][j] > 0 ? rest / upper[j][j] : 0;
+    }
+    return solution;
+  }
+
+  private static double dot(double[] one, double[] other) {
+    double sum = 0;
+    for (int i = 0; i < one.length; i++) {
+      sum += one[i] * other[i];
+    }
+    return sum;
+  }
+
+  private static void subtract(double[] from, double[] direction, double share) {
+    for (int i = 0; i < from.length; i++) {
+      from[i] -= share * direction[i];
+    }
   }
 }

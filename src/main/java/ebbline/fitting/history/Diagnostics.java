@@ -1,6 +1,5 @@
 package ebbline.fitting.history;
 
-import ebbline.fitting.history.HistoryEstimate.Reverting;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -33,14 +32,18 @@ public record Diagnostics(
     notes = List.copyOf(notes);
   }
 
-  /** All tests of an estimate on its history. */
-  public static Diagnostics of(RateHistory history, Reverting estimate, Resampling resampling) {
+  /**
+   * All tests of an estimate on its history; where no reversion was found, of the random walk in
+   * its place.
+   */
+  public static Diagnostics of(
+      RateHistory history, HistoryEstimate estimate, Resampling resampling) {
     List<String> notes = new ArrayList<>();
     List<DickeyFuller> roots = new ArrayList<>();
     for (int lags : LAGS) {
       attempt(notes, () -> DickeyFuller.of(history, lags)).ifPresent(roots::add);
     }
-    double[] residuals = Residuals.of(history, estimate.law());
+    double[] residuals = Residuals.of(history, estimate);
     return new Diagnostics(
         roots,
         attempt(notes, () -> ResidualTest.ljungBox(residuals, CORRELATIONS)),

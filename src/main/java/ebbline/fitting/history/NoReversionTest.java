@@ -16,8 +16,16 @@ public record NoReversionTest(double statistic, double pValue, int replications)
   /** Longer walks give the same law, to less than the noise of the share. */
   private static final int MOST = 1000;
 
-  /** Tests a history of at least four rates that vary. */
+  /**
+   * Tests a history.
+   *
+   * @throws IllegalArgumentException in words if it has fewer than four rates, or they do not vary
+   */
   public static NoReversionTest of(RateHistory history, Resampling resampling) {
+    if (history.size() < Refusals.FEWEST) {
+      throw new IllegalArgumentException(
+          "a test of mean reversion needs at least 4 rates, found " + history.size());
+    }
     TestedHistory tested = TestedHistory.of(history);
     double drift = (history.rate(history.size() - 1) - history.rate(0)) / history.span();
     double walk = 0;

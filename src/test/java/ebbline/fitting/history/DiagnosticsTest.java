@@ -185,4 +185,33 @@ class DiagnosticsTest {
             () -> DickeyFuller.of(RateHistory.ofStep(1, new double[] {1, 2, 3, 4, 5, 6, 7, 8}), 1))
         .hasMessageContaining("whose changes vary");
   }
+
+  @Test
+  void aRandomWalkIsDiagnosedToo() {
+    RateHistory history = Histories.of("tb3_1958_1981");
+    HistoryEstimate none = HistoryEstimator.estimate(history, HistoryMethod.OLS);
+    assertThat(none).isInstanceOf(HistoryEstimate.Undetermined.class);
+    Diagnostics found = Diagnostics.of(history, none, FEW);
+    assertThat(found.dickeyFuller()).hasSize(3);
+    assertThat(found.dickeyFuller().get(0).statistic()).isPositive();
+    assertThat(found.jarqueBera().orElseThrow().pValue()).isLessThan(1e-6);
+    assertThat(found.noReversion().orElseThrow().pValue()).isGreaterThan(0.05);
+    assertThat(found.notes()).isEmpty();
+  }
+
+  @Test
+  void aHistoryThatHoldsNothingHasNotesInPlaceOfTests() {
+    for (double[] rates : new double[][] {{}, {0.02, 0.03}, new double[30]}) {
+      RateHistory history = RateHistory.ofStep(1, rates);
+      Diagnostics found =
+          Diagnostics.of(history, HistoryEstimator.estimate(history, HistoryMethod.OLS), FEW);
+      assertThat(found.dickeyFuller()).isEmpty();
+      assertThat(found.ljungBox()).isEmpty();
+      assertThat(found.jarqueBera()).isEmpty();
+      assertThat(found.arch()).isEmpty();
+      assertThat(found.noReversion()).isEmpty();
+      assertThat(found.outOfSample()).isEmpty();
+      assertThat(found.notes()).hasSizeGreaterThanOrEqualTo(5);
+    }
+  }
 }

@@ -9,7 +9,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /**
  * The estimator on histories whose law is known: 20 years of monthly rates. The table that it
- * prints stands in docs/validation.md.
+ * prints stands in docs/estimation.md.
  */
 class EstimatorStudyTest {
   private static final int HISTORIES = 800;

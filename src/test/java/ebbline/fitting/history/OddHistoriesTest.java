@@ -35,6 +35,9 @@ class OddHistoriesTest {
           Undetermined none = (Undetermined) estimate;
           assertThat(none.explanation()).as(label).doesNotContain("NaN", "Infinity");
           none.walk().ifPresent(walk -> checkWalk(walk, label));
+          if (k % 10 == 0) {
+            checkTests(Diagnostics.of(history, none, FEW), label);
+          }
         }
       }
     }
@@ -112,19 +115,22 @@ class OddHistoriesTest {
       interval.low().ifPresent(v -> finite(label, v));
       interval.high().ifPresent(v -> finite(label, v));
     }
-    Diagnostics tests = Diagnostics.of(history, found, FEW);
-    tests.dickeyFuller().forEach(t -> finite(label, t.statistic(), t.pValue()));
-    tests.ljungBox().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
-    tests.jarqueBera().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
-    tests.arch().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
-    tests.noReversion().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
-    tests.outOfSample().ifPresent(t -> finite(label, t.uniformityPValue(), t.oneStep().share()));
+    checkTests(Diagnostics.of(history, found, FEW), label);
     finite(label, BiasCorrection.analytic(found).corrected());
     try {
       finite(label, BiasCorrection.jackknife(history, found).corrected());
     } catch (IllegalArgumentException e) {
       assertThat(e.getMessage()).startsWith("the jackknife");
     }
+  }
+
+  private static void checkTests(Diagnostics tests, String label) {
+    tests.dickeyFuller().forEach(t -> finite(label, t.statistic(), t.pValue()));
+    tests.ljungBox().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
+    tests.jarqueBera().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
+    tests.arch().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
+    tests.noReversion().ifPresent(t -> finite(label, t.statistic(), t.pValue()));
+    tests.outOfSample().ifPresent(t -> finite(label, t.uniformityPValue(), t.oneStep().share()));
   }
 
   private static void checkWalk(RandomWalk walk, String label) {

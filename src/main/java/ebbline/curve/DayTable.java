@@ -86,6 +86,24 @@ public final class DayTable {
     return (s0 + s1) + (s2 + s3);
   }
 
+  /**
+   * Present value of one unit on each of the days {@code from} to {@code to} − 1: what a level
+   * coupon is worth per unit.
+   *
+   * @param days each from 0 to {@link #lastDay}
+   */
+  public double annuity(int[] days, int from, int to) {
+    double[] table = discounts;
+    double s0 = 0;
+    double s1 = 0;
+    int i = from;
+    for (; i + 1 < to; i += 2) {
+      s0 += table[days[i]];
+      s1 += table[days[i + 1]];
+    }
+    return i < to ? s0 + s1 + table[days[i]] : s0 + s1;
+  }
+
   /** All factors, from day 0. A fresh array. */
   public double[] discounts() {
     return Arrays.copyOf(discounts, discounts.length);

@@ -1,5 +1,6 @@
 package ebbline.curve;
 
+import java.util.Arrays;
 import java.util.Objects;
 
 /**
@@ -29,21 +30,23 @@ public final class InterpolatedCurve implements DiscountCurve {
     this.times = times;
     this.logs = logs;
     scheme = Scheme.of(interpolation, times, logs);
-    pieces = scheme.pieces().numbers();
+    double[] numbers = scheme.pieces().numbers();
+    pieces = Arrays.copyOf(numbers, numbers.length + 1);
+    pieces[numbers.length] = Double.POSITIVE_INFINITY; // no piece begins there: the search stops
     straight = interpolation == Interpolation.LOG_LINEAR;
     // A table of equal cells leads to the piece in a step or two, however many pieces there are.
-    int count = pieces.length / WIDTH;
+    int count = numbers.length / WIDTH;
     int cells = Math.min(MOST_CELLS, CELLS_PER_PIECE * count);
     cellsPerYear = cells / times[times.length - 1];
     firstPiece = new int[cells + 1];
     int at = 0;
     for (int cell = 0; cell <= cells; cell++) {
-      while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= cell / cellsPerYear) {
+      while (pieces[at + WIDTH] <= cell / cellsPerYear) {
         at += WIDTH;
       }
       firstPiece[cell] = Math.max(0, at - WIDTH); // one early: rounding of the cell cannot skip
     }
-    for (double number : pieces) {
+    for (double number : numbers) {
       if (!Double.isFinite(number)) {
         throw new IllegalArgumentException(
             "nodes must leave finite forwards; they lie too close together or too far from 1");
@@ -81,7 +84,10 @@ public final class InterpolatedCurve implements DiscountCurve {
   /** Where the piece that holds t begins in the array. */
   private int piece(double t) {
     int at = firstPiece[Math.min((int) (t * cellsPerYear), firstPiece.length - 1)];
-    while (at + WIDTH < pieces.length && pieces[at + WIDTH] <= t) {
+    // Two steps without a branch to guess wrong; more only where pieces are shorter than a cell.
+    at += pieces[at + WIDTH] <= t ? WIDTH : 0;
+    at += pieces[at + WIDTH] <= t ? WIDTH : 0;
+    while (pieces[at + WIDTH] <= t) {
       at += WIDTH;
     }
     return at;

@@ -45,6 +45,19 @@ class DayTableTest {
   }
 
   @Test
+  void anAnnuityIsAFlowOfOneOnEveryDay() {
+    DayTable table = DayTable.of(CURVE, 10_950, 365);
+    int[] days = {0, 181, 365, 365, 10_950};
+    for (int to = 0; to <= days.length; to++) {
+      double plain = 0;
+      for (int i = 0; i < to; i++) {
+        plain += table.discount(days[i]);
+      }
+      assertThat(table.annuity(days, 0, to)).isCloseTo(plain, within(1e-15));
+    }
+  }
+
+  @Test
   void tablesThatCannotBeAreRefused() {
     assertThatThrownBy(() -> DayTable.of(CURVE, -1, 365)).hasMessageContaining("found -1");
     assertThatThrownBy(() -> DayTable.of(CURVE, DayTable.MOST_DAYS + 1, 365))

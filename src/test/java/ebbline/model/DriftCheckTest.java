@@ -5,6 +5,9 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
 import ebbline.curve.DiscountCurve;
+import ebbline.curve.InterpolatedCurve;
+import ebbline.curve.Interpolation;
+import java.util.List;
 import org.junit.jupiter.api.Test;
 
 class DriftCheckTest {
@@ -22,6 +25,28 @@ class DriftCheckTest {
         DriftCheck check = DriftCheck.at(rates, TIMES);
         assertThat(check.worst()).as("a = %s", reversion).isLessThan(1e-13);
         assertThat(check.points()).isEqualTo(TIMES.length);
+      }
+    }
+  }
+
+  @Test
+  void theDriftRepricesTheNodesOfEveryInterpolation() {
+    double[] nodes = {0.25, 0.5, 1, 2, 3, 5, 7, 10, 15, 20, 30, 50};
+    double[] logs = new double[nodes.length];
+    for (int i = 0; i < nodes.length; i++) {
+      logs[i] = -nodes[i] * (0.03 + 0.01 * Math.sin(nodes[i]) / (1 + nodes[i]));
+    }
+    for (Interpolation interpolation : Interpolation.values()) {
+      if (interpolation == Interpolation.SMITH_WILSON) {
+        continue; // not made from nodes alone
+      }
+      DiscountCurve curve = InterpolatedCurve.of(interpolation, nodes, logs);
+      for (double reversion : new double[] {0, 0.1, 1}) {
+        for (VolatilitySteps volatility : List.of(STEPS, VolatilitySteps.constant(0.01))) {
+          DriftCheck check = DriftCheck.of(new HullWhite(reversion, volatility).on(curve));
+          assertThat(check.points()).isEqualTo(nodes.length);
+          assertThat(check.worst()).as("%s, a = %s", interpolation, reversion).isLessThan(1e-13);
+        }
       }
     }
   }

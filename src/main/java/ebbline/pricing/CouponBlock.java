@@ -2,7 +2,6 @@ package ebbline.pricing;
 
 /** Options on coupon bonds side by side: every loop runs over the options of one block. */
 final class CouponBlock {
-  private static final double STOP = 1e-9;
   private static final int MOST_STEPS = 60;
 
   private final FastRates rates;
@@ -11,11 +10,13 @@ final class CouponBlock {
   private final double[][] term;
   private final double[] deviation;
   private final double[] discount;
+  private final double[] growth;
   private final double[] logStrike;
   private final double[] root;
   private final double[] move;
   private final double[] value;
   private final double[] slope;
+  private final double[] top;
   private final double[] w1;
   private final double[] w2;
 
@@ -26,11 +27,13 @@ final class CouponBlock {
     term = new double[flows][size];
     deviation = new double[size];
     discount = new double[size];
+    growth = new double[size];
     logStrike = new double[size];
     root = new double[size];
     move = new double[size];
     value = new double[size];
     slope = new double[size];
+    top = new double[size];
     w1 = new double[size];
     w2 = new double[size];
   }
@@ -46,10 +49,14 @@ final class CouponBlock {
     for (int i = 0; i < n; i++) {
       w1[i] = expiry[from + i];
       value[i] = rates.curve.logDiscount(w1[i]);
+      top[i] = 0;
       logStrike[i] = strike[from + i] > 0 ? Math.log(strike[from + i]) : 0;
     }
     rates.deviation(w1, w2, deviation, n);
     FastExp.exp(value, discount, n);
+    for (int i = 0; i < n; i++) {
+      growth[i] = 1 / discount[i];
+    }
     for (int j = 0; j < times.length; j++) {
       prepare(j, expiry, times[j], amounts[j], from, n);
     }
@@ -95,26 +102,29 @@ final class CouponBlock {
       w1[i] = rates.curve.logDiscount(times[from + i]);
     }
     FastExp.exp(w1, worth[j], n);
-    shifts(shift[j], deviation, w1, n);
+    shifts(shift[j], deviation, w1, top, n);
     FastExp.exp(w1, term[j], n);
-    for (int i = 0; i < n; i++) {
-      worth[j][i] *= amounts[from + i];
-    }
-    divide(worth[j], discount, term[j], n);
+    weigh(worth[j], amounts, from, growth, term[j], n);
   }
 
-  /** b from G, and −b²/2. */
-  private static void shifts(double[] shift, double[] deviation, double[] half, int n) {
+  /** b from G, −b²/2, and the largest b so far. */
+  private static void shifts(
+      double[] shift, double[] deviation, double[] half, double[] top, int n) {
     for (int i = 0; i < n; i++) {
       double b = shift[i] * deviation[i];
       shift[i] = b;
       half[i] = -0.5 * b * b;
+      top[i] = Math.max(top[i], b);
     }
   }
 
-  private static void divide(double[] worth, double[] discount, double[] term, int n) {
+  /** Amounts into worth, and worth over today's factor of the expiry into the terms. */
+  private static void weigh(
+      double[] worth, double[] amounts, int from, double[] growth, double[] term, int n) {
     for (int i = 0; i < n; i++) {
-      term[i] = term[i] * worth[i] / discount[i];
+      double w = worth[i] * amounts[from + i];
+      worth[i] = w;
+      term[i] = term[i] * w * growth[i];
     }
   }
 
@@ -137,6 +147,7 @@ final class CouponBlock {
         addTerm(term[j], shift[j], value, slope, n);
       }
       double largest = 0;
+      double reach = 0;
       for (int i = 0; i < n; i++) {
         double d =
             slope[i] > CouponOptions.CALM
@@ -144,14 +155,19 @@ final class CouponBlock {
                 : 0;
         move[i] = d;
         root[i] += d;
-        largest = Math.max(largest, Math.abs(d));
+        largest = Math.max(largest, top[i] * d * d);
+        reach = Math.max(reach, Math.abs(top[i] * d));
       }
       for (int j = 0; j < term.length; j++) {
-        minusProduct(shift[j], move, w1, n);
-        FastExp.exp(w1, w2, n);
-        multiply(term[j], w2, n);
+        if (reach <= FastExp.SHORT) {
+          FastExp.decay(term[j], shift[j], move, n);
+        } else {
+          minusProduct(shift[j], move, w1, n);
+          FastExp.exp(w1, w2, n);
+          multiply(term[j], w2, n);
+        }
       }
-      if (largest < STOP) {
+      if (largest < CouponOptions.STOP) {
         return;
       }
     }

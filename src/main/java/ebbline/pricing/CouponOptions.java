@@ -14,7 +14,8 @@ public final class CouponOptions {
    * The bond at expiry is Σ wⱼ exp(−bⱼ z), z standard normal, and the boundary solves Σ wⱼ exp(−bⱼ z) = K. The log of the
    * bond price is nearly straight in z, so Newton on it takes three or four steps from 0. A step is small in bⱼ, so
    * the terms are carried by wⱼ ← wⱼ e^(−bⱼ δ) with a short series instead of fresh exponentials. The error of the root
-   * enters squared: stopping at 1e-9 leaves nothing. At the root each term times the density of z is the flow's own
+   * enters the value squared, and after a step δ it is at most ½ max(b) δ²: once max(b) δ² is below 1e-8 nothing
+   * is left to gain. At the root each term times the density of z is the flow's own
    * worth times the density of z + bⱼ, so the sum of normal tails takes one exponential, not n + 1.
    */
   /** Items of one block pass. */
@@ -23,11 +24,10 @@ public final class CouponOptions {
   /** A state that moves less than this is certain. */
   static final double CALM = 1e-100;
 
-  private static final double STOP = 1e-9;
-  private static final int MOST_STEPS = 60;
+  /** Of max(b) δ², see the note above. */
+  static final double STOP = 1e-8;
 
-  /** Largest move of an exponent for which the short series holds 1e-16. */
-  private static final double SHORT = 0.125;
+  private static final int MOST_STEPS = 60;
 
   private final FastRates rates;
 
@@ -44,6 +44,7 @@ public final class CouponOptions {
     private final double[] shift;
     private final double[] worth;
     private final double[] term;
+    private double largest;
 
     /**
      * @param flows the largest number of flows
@@ -108,13 +109,16 @@ public final class CouponOptions {
   private void prepare(
       double expiry, double s, double p0, double[] times, double[] amounts, int flows, Work work) {
     double growth = 1 / p0;
+    double largest = 0;
     for (int j = 0; j < flows; j++) {
       double b = s * rates.g(times[j] - expiry);
       double worth = amounts[j] * Math.exp(rates.curve.logDiscount(times[j]));
       work.shift[j] = b;
+      largest = b > largest ? b : largest;
       work.worth[j] = worth;
-      work.term[j] = worth * growth * exp(-0.5 * b * b);
+      work.term[j] = worth * growth * FastExp.exp(-0.5 * b * b);
     }
+    work.largest = largest;
   }
 
   private static double boundary(double strike, int flows, Work work) {
@@ -132,29 +136,13 @@ public final class CouponOptions {
       double move = (Math.log(f) - logStrike) * f / g;
       z += move;
       for (int j = 0; j < flows; j++) {
-        term[j] *= exp(-shift[j] * move);
+        term[j] *= FastExp.exp(-shift[j] * move);
       }
-      if (Math.abs(move) < STOP) {
+      if (work.largest * move * move < STOP) {
         break;
       }
     }
     return z;
-  }
-
-  private static double exp(double x) {
-    if (Math.abs(x) <= SHORT) {
-      double m = 1.0 / 3628800;
-      m = Math.fma(m, x, 1.0 / 362880);
-      m = Math.fma(m, x, 1.0 / 40320);
-      m = Math.fma(m, x, 1.0 / 5040);
-      m = Math.fma(m, x, 1.0 / 720);
-      m = Math.fma(m, x, 1.0 / 120);
-      m = Math.fma(m, x, 1.0 / 24);
-      m = Math.fma(m, x, 1.0 / 6);
-      m = Math.fma(m, x, 0.5);
-      return Math.fma(Math.fma(m, x, 1), x, 1);
-    }
-    return Math.exp(x);
   }
 
   /**

@@ -53,6 +53,7 @@ public record Bond(
 
   @Override
   public Claim claim(TimeAxis axis) {
+    axis.years(maturity); // a date on an axis without one is said before anything is counted
     if (!axis.isDated(maturity)) {
       return new Claim(flowsAfter(0, axis), List.of(), 0, accrued(0, axis));
     }

@@ -1,0 +1,120 @@
+package ebbline.bond;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
+
+import ebbline.curve.FlatCurve;
+import ebbline.instrument.Bond;
+import ebbline.instrument.CashFlows;
+import ebbline.time.DayCount;
+import ebbline.time.Moment;
+import ebbline.time.TimeAxis;
+import java.time.LocalDate;
+import java.util.Random;
+import org.junit.jupiter.api.Test;
+
+class StreetYieldTest {
+
+  private static StreetYield street(String settle, String maturity, double coupon, int frequency) {
+    Bond bond = new Bond(Moment.parse(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
+    return new StreetYield(bond.periodFlows(TimeAxis.from(LocalDate.parse(settle))));
+  }
+
+  private static StreetYield timed(double maturity, double coupon, int frequency) {
+    Bond bond =
+        new Bond(Moment.ofYears(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
+    return new StreetYield(bond.periodFlows(TimeAxis.undated()));
+  }
+
+  /** ISO/IEC 29500-1 sec. 18.17.7, worked examples of DURATION and MDURATION, basis 1. */
+  @Test
+  void thePublishedDurationsAreMet() {
+    assertThat(street("2018-07-01", "2048-01-01", 0.08, 2).macaulayDuration(0.09))
+        .isCloseTo(10.9191452815919, within(5e-14));
+    assertThat(street("2008-01-01", "2016-01-01", 0.08, 2).modifiedDuration(0.09))
+        .isCloseTo(5.73566981391884, within(5e-15));
+  }
+
+  /** Fabozzi, Bond Markets, Analysis and Strategies, ch. 4 (from memory). */
+  @Test
+  void theTextbookBondsAreMet() {
+    StreetYield five = timed(5, 0.09, 2);
+    assertThat(five.price(0.09)).isCloseTo(100, within(1e-12));
+    assertThat(five.macaulayDuration(0.09)).isCloseTo(4.13, within(0.005));
+    assertThat(five.convexity(0.09)).isCloseTo(19.45, within(0.005));
+    StreetYield long25 = timed(25, 0.09, 2);
+    assertThat(long25.modifiedDuration(0.09)).isCloseTo(9.88, within(0.005));
+    assertThat(long25.convexity(0.09)).isCloseTo(160.72, within(0.005));
+    assertThat(timed(5, 0.06, 2).price(0.09)).isCloseTo(88.1309, within(0.00005));
+  }
+
+  /** The spreadsheet standard's PRICE with one coupon left: 100.119716209 clean. */
+  @Test
+  void theLastPeriodHasSimpleInterest() {
+    StreetYield last = street("2025-09-01", "2025-11-15", 0.0475, 2);
+    double accrued = 2.375 * 109 / 184;
+    assertThat(last.price(0.041) - accrued).isCloseTo(100.119716209, within(5e-10));
+    assertThat(last.yieldOf(last.price(-0.03))).isCloseTo(-0.03, within(1e-14));
+  }
+
+  @Test
+  void yieldsComeBackFromPrices() {
+    Random random = new Random(11);
+    for (int i = 0; i < 10_000; i++) {
+      StreetYield bond =
+          timed(
+              0.05 + 40 * random.nextDouble(),
+              0.1 * random.nextDouble(),
+              new int[] {1, 2, 4, 12}[random.nextInt(4)]);
+      double yield = -0.02 + 0.2 * random.nextDouble();
+      double price = bond.price(yield);
+      assertThat(bond.yieldOf(price)).isCloseTo(yield, within(1e-12));
+    }
+  }
+
+  @Test
+  void derivativesAgreeWithFiniteDifferences() {
+    Random random = new Random(12);
+    for (int i = 0; i < 500; i++) {
+      StreetYield bond = timed(0.05 + 30 * random.nextDouble(), 0.06, 2);
+      double yield = -0.01 + 0.1 * random.nextDouble();
+      double h = 1e-5;
+      double up = bond.price(yield + h);
+      double down = bond.price(yield - h);
+      double price = bond.price(yield);
+      assertThat(bond.modifiedDuration(yield))
+          .isCloseTo((down - up) / (2 * h * price), within(1e-6));
+      assertThat(bond.convexity(yield))
+          .isCloseTo((up - 2 * price + down) / (h * h * price), within(2e-2));
+      assertThat(bond.dv01(yield))
+          .isCloseTo((bond.price(yield - 1e-4) - bond.price(yield + 1e-4)) / 2, within(1e-15));
+    }
+  }
+
+  @Test
+  void extremePricesStillHaveYieldsOrAreRefused() {
+    StreetYield bond = timed(30, 0.05, 2);
+    assertThat(bond.price(bond.yieldOf(1e-3))).isCloseTo(1e-3, within(1e-15));
+    assertThat(bond.price(bond.yieldOf(1e6))).isCloseTo(1e6, within(1e-6));
+    assertThatThrownBy(() -> bond.yieldOf(0)).hasMessageContaining("not above 0");
+    assertThatThrownBy(() -> bond.yieldOf(Double.NaN)).hasMessageContaining("NaN");
+    assertThatThrownBy(() -> bond.price(-2)).hasMessageContaining("above -2.0");
+    assertThatThrownBy(() -> timed(5, -0.05, 2).yieldOf(60)).hasMessageContaining("both signs");
+  }
+
+  @Test
+  void theSpreadOverACurveIsFoundAndRefused() {
+    CashFlows flows = CashFlows.of(new double[] {0.5, 1, 1.5}, new double[] {3, 3, 103});
+    FlatCurve curve = FlatCurve.of(0.04);
+    double dirty = 0;
+    for (int i = 0; i < 3; i++) {
+      dirty += flows.amount(i) * Math.exp(-(0.04 + 0.0123) * (flows.time(i) - 0.25));
+    }
+    assertThat(ZSpread.of(flows, curve, 0.25, dirty)).isCloseTo(0.0123, within(1e-14));
+    assertThat(ZSpread.of(flows, curve, 0.25, 1000)).isNegative();
+    assertThatThrownBy(() -> ZSpread.of(flows, curve, 0, -1)).hasMessageContaining("found -1");
+    assertThatThrownBy(() -> ZSpread.of(flows.times(-1), curve, 0, 90))
+        .hasMessageContaining("both signs");
+  }
+}

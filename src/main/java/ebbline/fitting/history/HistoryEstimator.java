@@ -27,7 +27,7 @@ public final class HistoryEstimator {
       return Refusals.tooFew(history, method);
     }
     LaggedSums sums = LaggedSums.of(history.ratesInPlace());
-    Extremes extremes = Extremes.of(history.ratesInPlace());
+    Extremes extremes = Extremes.of(history.ratesInPlace(), sums.squaredChanges());
     Sample sample = sample(history, sums, extremes);
     Optional<Undetermined> refusal =
         Refusals.beforeFitting(history, sample, sums, extremes, method);

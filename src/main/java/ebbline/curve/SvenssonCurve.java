@@ -40,6 +40,16 @@ public final class SvenssonCurve implements DiscountCurve {
     return of(beta0, beta1, beta2, 0, tau1, tau1);
   }
 
+  /** (1 − e^(−u))/u at u = t/τ: how β₁ enters a zero rate. */
+  public static double slopeLoading(double t, double tau) {
+    return Loadings.slope(t / tau);
+  }
+
+  /** (1 − e^(−u))/u − e^(−u) at u = t/τ: how β₂ and β₃ enter a zero rate. */
+  public static double curvatureLoading(double t, double tau) {
+    return Loadings.curvature(t / tau);
+  }
+
   /** β₀ to β₃. A fresh array. */
   public double[] betas() {
     return new double[] {beta0, beta1, beta2, beta3};

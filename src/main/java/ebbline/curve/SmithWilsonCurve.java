@@ -24,7 +24,9 @@ public final class SmithWilsonCurve implements DiscountCurve {
   private final double[] times;
   private final double[] weights;
   private final double[] logs;
-  private final KernelSystem system;
+
+  /** Made when node sensitivities are first asked for, unless the curve came from its nodes. */
+  private volatile KernelSystem system;
 
   // Of interval i, (uᵢ₋₁, uᵢ]: 1 + Σ α uⱼ wⱼ and Σ sinh(αuⱼ) e^(−αuᵢ₋₁) wⱼ over the nodes before
   // it,
@@ -99,8 +101,7 @@ public final class SmithWilsonCurve implements DiscountCurve {
       double[] times, double[] weights, double ultimateForward, double speed) {
     NodeRules.check(times, weights);
     checkSettings(ultimateForward, speed);
-    return new SmithWilsonCurve(
-        times.clone(), weights.clone(), ultimateForward, speed, new KernelSystem(times, speed));
+    return new SmithWilsonCurve(times.clone(), weights.clone(), ultimateForward, speed, null);
   }
 
   private static void checkSettings(double ultimateForward, double speed) {
@@ -240,7 +241,12 @@ public final class SmithWilsonCurve implements DiscountCurve {
     for (int j = 0; j < times.length; j++) {
       kernels[j] = kernel(t, times[j], speed);
     }
-    double[] share = system.solve(kernels);
+    KernelSystem solved = system;
+    if (solved == null) {
+      solved = new KernelSystem(times, speed);
+      system = solved; // two threads may both make it: the same figures
+    }
+    double[] share = solved.solve(kernels);
     double scale = weight / growthAt(t);
     for (int j = 0; j < times.length; j++) {
       gradient[j] += scale * share[j] * growthAt(times[j]);

@@ -16,6 +16,9 @@ import java.util.Objects;
 public final class CurveBuilder {
   private static final int MOST_ROUNDS = 100;
 
+  /** Half a minute in years: moments as close as this are one. */
+  static final double SAME_TIME = 1e-6;
+
   private final Interpolation interpolation;
   private final double[] nodes;
   private final boolean robust;
@@ -102,7 +105,7 @@ public final class CurveBuilder {
     for (int i = 1; i < sorted.size(); i++) {
       QuoteEquation one = sorted.get(i - 1);
       QuoteEquation other = sorted.get(i);
-      if (one.lastTime() == other.lastTime()) {
+      if (!(other.lastTime() - one.lastTime() > SAME_TIME)) {
         throw new IllegalArgumentException(
             "two quotes must not end at the same time unless nodes are given, found "
                 + one.id()
@@ -169,7 +172,29 @@ public final class CurveBuilder {
     }
     List<String> warnings = CurveWarnings.of(curve, quotes, fitted, exact);
     return new CurveFit(
-        curve, fitted, unmet, outliers, problem, outcome.steps, condition, inverse, warnings);
+        curve,
+        fitted,
+        unmet,
+        outliers,
+        problem,
+        outcome.steps,
+        condition,
+        t -> discountByQuote(curve, inverse, t),
+        warnings);
+  }
+
+  /** ∂P(t)/∂quote from ∂ ln P(node)/∂quote. */
+  private static double[] discountByQuote(
+      InterpolatedCurve curve, double[][] nodeByQuote, double t) {
+    double[] gradient = new double[nodeByQuote.length];
+    curve.addLogDiscountGradient(t, curve.discount(t), gradient);
+    double[] byQuote = new double[nodeByQuote[0].length];
+    for (int i = 0; i < gradient.length; i++) {
+      for (int k = 0; k < byQuote.length; k++) {
+        byQuote[k] += gradient[i] * nodeByQuote[i][k];
+      }
+    }
+    return byQuote;
   }
 
   /** Of the Jacobian with ln P(t) replaced by the zero rate, ln P = −t z. */

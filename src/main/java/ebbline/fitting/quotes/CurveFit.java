@@ -3,6 +3,7 @@ package ebbline.fitting.quotes;
 import ebbline.curve.DiscountCurve;
 import ebbline.fitting.FittedQuote;
 import java.util.List;
+import java.util.function.DoubleFunction;
 
 /**
  * A curve made from quotes, what it makes of each of them, and how far to trust it.
@@ -18,7 +19,7 @@ public final class CurveFit {
   private final String problem;
   private final int steps;
   private final double condition;
-  private final double[][] nodeByQuote;
+  private final DoubleFunction<double[]> byQuote;
   private final List<String> warnings;
 
   CurveFit(
@@ -29,7 +30,7 @@ public final class CurveFit {
       String problem,
       int steps,
       double condition,
-      double[][] nodeByQuote,
+      DoubleFunction<double[]> byQuote,
       List<String> warnings) {
     this.curve = curve;
     this.quotes = List.copyOf(quotes);
@@ -38,7 +39,7 @@ public final class CurveFit {
     this.problem = problem;
     this.steps = steps;
     this.condition = condition;
-    this.nodeByQuote = nodeByQuote;
+    this.byQuote = byQuote;
     this.warnings = List.copyOf(warnings);
   }
 
@@ -98,14 +99,6 @@ public final class CurveFit {
    * @param t years
    */
   public double[] discountByQuote(double t) {
-    double[] gradient = new double[nodeByQuote.length];
-    curve.addLogDiscountGradient(t, curve.discount(t), gradient);
-    double[] byQuote = new double[quotes.size()];
-    for (int i = 0; i < gradient.length; i++) {
-      for (int k = 0; k < byQuote.length; k++) {
-        byQuote[k] += gradient[i] * nodeByQuote[i][k];
-      }
-    }
-    return byQuote;
+    return byQuote.apply(t);
   }
 }

@@ -3,6 +3,7 @@ package ebbline.fitting.quotes;
 import ebbline.curve.SmithWilsonCurve;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.DoubleFunction;
 
 /** The linear equations of quotes, ready to be solved for Smith and Wilson's kernels. */
 final class KernelSolution {
@@ -60,43 +61,51 @@ final class KernelSolution {
       return largestRow(matrix) * largestRow(factors.inverse());
     }
 
-    /** ∂ ln P(node)/∂quote: a quote moves its own side and its own row. */
-    double[][] nodeByQuote(List<QuoteEquation> quotes) {
-      int n = quotes.size();
-      int m = times.length;
-      double[][] byNode = new double[m][n];
+    /** ∂P(t)/∂quote as a function of t: a quote moves its own side and its own row. */
+    DoubleFunction<double[]> discountByQuote(List<QuoteEquation> quotes) {
       double omega = Math.log1p(ultimateForward);
-      double[] logs = curve.nodeLogDiscounts();
+      double[][] moves = new double[quotes.size()][];
       double[] multipliers = factors.solve(side);
-      for (int i = 0; i < n; i++) {
-        QuoteEquation quote = quotes.get(i);
-        double[] slopes = quote.rowSlope(times);
-        // w = Qᵀ b, and (Q H Qᵀ) b = s: row i of Q moves by q′, s by the gap's slope less what the
-        // row itself takes.
-        double[] move = new double[m];
-        for (int k = 0; k < m; k++) {
-          move[k] = slopes[k] * Math.exp(-omega * times[k]) * multipliers[i];
-        }
-        double[] direct = kernelTimes(move);
-        double[] rest = new double[n];
-        for (int r = 0; r < n; r++) {
-          for (int k = 0; k < m; k++) {
-            rest[r] -= scaled[r][k] * direct[k];
+      for (int i = 0; i < moves.length; i++) {
+        moves[i] = weightsByQuote(quotes.get(i), i, multipliers[i]);
+      }
+      return t -> {
+        double[] byQuote = new double[moves.length];
+        for (int k = 0; k < times.length; k++) {
+          double kernel = SmithWilsonCurve.kernel(t, times[k], curve.speed());
+          for (int i = 0; i < moves.length; i++) {
+            byQuote[i] += Math.exp(-omega * t) * kernel * moves[i][k];
           }
         }
-        rest[i] -= quote.gapSlope(curve);
-        double[] b = factors.solve(rest);
-        for (int k = 0; k < m; k++) {
-          for (int r = 0; r < n; r++) {
-            move[k] += scaled[r][k] * b[r];
-          }
-        }
-        double[] growth = kernelTimes(move);
-        for (int k = 0; k < m; k++) {
-          byNode[k][i] = growth[k] * Math.exp(-omega * times[k] - logs[k]);
+        return byQuote;
+      };
+    }
+
+    /*
+     * With Q = A D, w = Qᵀ b: row i of Q moves by q′, and the growth H dw that this brings must leave every other
+     * equation as it is and make up for the gap's own slope in equation i.
+     */
+    private double[] weightsByQuote(QuoteEquation quote, int i, double multiplier) {
+      double omega = Math.log1p(ultimateForward);
+      double[] move = quote.rowSlope(times);
+      for (int k = 0; k < move.length; k++) {
+        move[k] *= Math.exp(-omega * times[k]) * multiplier;
+      }
+      double[] direct = kernelTimes(move);
+      double[] rest = new double[scaled.length];
+      for (int r = 0; r < rest.length; r++) {
+        for (int k = 0; k < direct.length; k++) {
+          rest[r] -= scaled[r][k] * direct[k];
         }
       }
-      return byNode;
+      rest[i] -= quote.gapSlope(curve);
+      double[] b = factors.solve(rest);
+      for (int k = 0; k < move.length; k++) {
+        for (int r = 0; r < b.length; r++) {
+          move[k] += scaled[r][k] * b[r];
+        }
+      }
+      return move;
     }
 
     private double[] kernelTimes(double[] vector) {

@@ -95,7 +95,7 @@ public final class SmithWilsonBuilder {
         problem,
         1,
         solved.condition(),
-        solved.nodeByQuote(quotes),
+        solved.discountByQuote(quotes),
         warnings);
   }
 
@@ -140,12 +140,16 @@ public final class SmithWilsonBuilder {
     }
   }
 
-  /** Times of all flows, strictly increasing. */
+  /** Times of all flows, increasing, those that are one moment once. */
   static double[] flowTimes(List<QuoteEquation> quotes) {
-    return quotes.stream()
-        .flatMapToDouble(quote -> Arrays.stream(quote.times()))
-        .sorted()
-        .distinct()
-        .toArray();
+    double[] all =
+        quotes.stream().flatMapToDouble(quote -> Arrays.stream(quote.times())).sorted().toArray();
+    int count = 0;
+    for (double time : all) {
+      if (count == 0 || time - all[count - 1] > CurveBuilder.SAME_TIME) {
+        all[count++] = time;
+      }
+    }
+    return Arrays.copyOf(all, count);
   }
 }

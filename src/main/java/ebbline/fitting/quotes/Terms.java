@@ -140,10 +140,15 @@ final class Terms {
     }
   }
 
+  /** Which of the times is this moment. */
   static int index(double[] times, double time) {
-    int index = Arrays.binarySearch(times, time);
-    if (index >= 0) {
-      return index;
+    int found = Arrays.binarySearch(times, time);
+    int at = found >= 0 ? found : -found - 1;
+    if (at < times.length && times[at] - time <= CurveBuilder.SAME_TIME) {
+      return at;
+    }
+    if (at > 0 && time - times[at - 1] <= CurveBuilder.SAME_TIME) {
+      return at - 1;
     }
     throw new IllegalArgumentException("a quote's time must be among the curve's, found " + time);
   }

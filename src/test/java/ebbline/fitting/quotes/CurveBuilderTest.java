@@ -7,10 +7,12 @@ import static org.assertj.core.api.Assertions.within;
 import ebbline.curve.Compounding;
 import ebbline.curve.DiscountCurve;
 import ebbline.curve.FlatCurve;
+import ebbline.curve.InterpolatedCurve;
 import ebbline.curve.Interpolation;
 import ebbline.curve.SvenssonCurve;
 import ebbline.fitting.FittedQuote;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collections;
 import java.util.List;
 import java.util.Random;
@@ -285,5 +287,67 @@ class CurveBuilderTest {
         MarketQuotes.overnightSwap("a", 0, ends, ends, accruals, 0).fittedQuote(steep)
             - MarketQuotes.overnightSwap("b", 0, ends, later, accruals, 0).fittedQuote(steep);
     assertThat(Math.abs(difference)).isBetween(1e-8, 1e-5);
+  }
+
+  @Test
+  void randomSheetsAreRepricedByEveryInterpolation() {
+    Random random = new Random(17);
+    for (int sheet = 0; sheet < 60; sheet++) {
+      int n = 3 + random.nextInt(25);
+      double[] times = new double[n];
+      double[] logs = new double[n];
+      double t = 0;
+      double log = 0;
+      for (int i = 0; i < n; i++) {
+        double step = 0.1 + 1.5 * random.nextDouble();
+        log -= step * (0.06 * random.nextDouble() - 0.01);
+        t += step;
+        times[i] = t;
+        logs[i] = log;
+      }
+      for (Interpolation interpolation : Interpolation.values()) {
+        if (interpolation == Interpolation.SMITH_WILSON) {
+          continue;
+        }
+        DiscountCurve truth = InterpolatedCurve.of(interpolation, times, logs);
+        List<QuoteEquation> quotes = new ArrayList<>();
+        for (int i = 0; i < n; i++) {
+          double[] payments = Arrays.copyOf(times, i + 1);
+          double[] accruals = new double[i + 1];
+          for (int k = 0; k <= i; k++) {
+            accruals[k] = times[k] - (k == 0 ? 0 : times[k - 1]);
+          }
+          QuoteEquation quote = MarketQuotes.swap("q" + i, 0, times[i], payments, accruals, 0.03);
+          quotes.add(quote.withQuote(quote.fittedQuote(truth)));
+        }
+        CurveFit fit = CurveBuilder.of(interpolation).build(quotes);
+        assertThat(fit.problem()).as("sheet %s, %s", sheet, interpolation).isEmpty();
+        assertThat(fit.curve().logDiscount(t)).isCloseTo(log, within(1e-12));
+      }
+    }
+  }
+
+  @Test
+  void bootstrapsSurviveVeryHighAndVeryLowRates() {
+    for (double rate : new double[] {-0.05, 0, 0.3, 1.0}) {
+      List<QuoteEquation> quotes = new ArrayList<>();
+      for (int years = 1; years <= 20; years++) {
+        quotes.add(
+            MarketQuotes.swap(
+                years + "Y",
+                0,
+                years,
+                QuoteSheets.every(0, 1, years),
+                QuoteSheets.same(1, years),
+                rate));
+      }
+      for (Interpolation interpolation : Interpolation.values()) {
+        if (interpolation != Interpolation.SMITH_WILSON) {
+          CurveFit fit = CurveBuilder.of(interpolation).build(quotes);
+          assertThat(fit.problem()).as("%s at %s", interpolation, rate).isEmpty();
+          assertThat(fit.curve().zero(20)).isCloseTo(Math.log1p(rate), within(1e-11));
+        }
+      }
+    }
   }
 }

@@ -116,4 +116,19 @@ class SmithWilsonTest {
             () -> SmithWilsonBuilder.of(0.0345, 21).withTolerance(1e-9).build(swaps(-1, 0)))
         .hasMessageContaining("no speed");
   }
+
+  @Test
+  void momentsThatDifferByRoundingAreOne() {
+    List<QuoteEquation> quotes = new ArrayList<>();
+    quotes.add(MarketQuotes.swap("a", 0, 0.3, new double[] {0.3}, new double[] {0.3}, 0.02));
+    double other = 0.1 + 0.2; // not 0.3
+    quotes.add(
+        MarketQuotes.swap("b", 0, 2, new double[] {other, 2}, new double[] {0.3, 1.7}, 0.021));
+    CurveFit fit = RELEASED.withSpeed(0.1).build(quotes);
+    assertThat(fit.curve().nodes()).hasSize(2);
+    assertThat(fit.problem()).isEmpty();
+    double[] gradient = new double[2];
+    fit.curve().addLogDiscountGradient(2, 1, gradient);
+    assertThat(gradient).containsExactly(new double[] {0, 1}, within(1e-12));
+  }
 }

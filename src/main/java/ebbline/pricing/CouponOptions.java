@@ -112,7 +112,7 @@ public final class CouponOptions {
     double largest = 0;
     for (int j = 0; j < flows; j++) {
       double b = s * rates.g(times[j] - expiry);
-      double worth = amounts[j] * Math.exp(rates.curve.logDiscount(times[j]));
+      double worth = amounts[j] * FastExp.exp(rates.curve.logDiscount(times[j]));
       work.shift[j] = b;
       largest = b > largest ? b : largest;
       work.worth[j] = worth;

@@ -57,7 +57,7 @@ final class FastExp {
     }
   }
 
-  /** e^x, 2 units; quickest for |x| up to {@link #SHORT}. */
+  /** e^x, 4 units of the larger of 1 and e^x; quickest for |x| up to {@link #SHORT}. */
   static double exp(double x) {
     if (Math.abs(x) <= SHORT) {
       double x2 = x * x;
@@ -67,7 +67,7 @@ final class FastExp {
       double c = Math.fma(1.0 / 3628800, x2, Math.fma(1.0 / 362880, x, 1.0 / 40320));
       return 1 + Math.fma(Math.fma(c, x4, b), x4, a);
     }
-    return Math.exp(x);
+    return Math.abs(x) <= 2 ? 1 + expm1(x) : Math.exp(x);
   }
 
   /** e^x − 1 of one number; 2e-15 relative. */

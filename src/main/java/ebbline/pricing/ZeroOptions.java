@@ -47,10 +47,11 @@ public final class ZeroOptions {
     double l1 = rates.curve.logDiscount(maturity);
     double v = rates.g(maturity - expiry) * rates.deviation(expiry);
     double d = (l1 - l0 - log(strike)) / (v > TINY ? v : TINY) + 0.5 * v;
-    double p1 = Math.exp(l1);
+    double p1 = FastExp.exp(l1);
     double density = p1 * Math.exp(-0.5 * d * d);
     double taken = sided(side * d, p1, density * FastNormal.ratio(d));
-    double paid = sided(side * (d - v), strike * Math.exp(l0), density * FastNormal.ratio(d - v));
+    double paid =
+        sided(side * (d - v), strike * FastExp.exp(l0), density * FastNormal.ratio(d - v));
     double value = side * (taken - paid);
     return value > 0 ? value : 0;
   }

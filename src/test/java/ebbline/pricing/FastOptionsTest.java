@@ -174,6 +174,7 @@ class FastOptionsTest {
       compare(top, -top, Math::exp, FastExp::exp, 2e-15);
       compare(top, -top, Math::expm1, FastExp::expm1, 2e-15);
       compare(top, -top, Math::expm1, FastOptionsTest::scalar, 2e-15);
+      compare(top, -top, Math::exp, FastOptionsTest::scalarExp, 1e-15);
     }
     compare(2, 0.5, Math::log, FastLog::log, 3e-16);
     compare(50, 1e-3, Math::log, FastLog::log, 3e-16);
@@ -188,6 +189,12 @@ class FastOptionsTest {
   private static void scalar(double[] x, double[] out, int n) {
     for (int i = 0; i < n; i++) {
       out[i] = FastExp.expm1(x[i]);
+    }
+  }
+
+  private static void scalarExp(double[] x, double[] out, int n) {
+    for (int i = 0; i < n; i++) {
+      out[i] = FastExp.exp(x[i]);
     }
   }
 

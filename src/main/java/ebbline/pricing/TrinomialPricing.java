@@ -1,0 +1,115 @@
+package ebbline.pricing;
+
+import ebbline.instrument.CashFlows;
+import ebbline.instrument.Claim;
+import ebbline.instrument.Right;
+import ebbline.instrument.Right.Party;
+import ebbline.model.GaussianRates;
+import java.util.List;
+
+/**
+ * Claims with rights on a {@link TrinomialTree} that ends with the last decision.
+ *
+ * <p>The tree carries the value of the rights only; what a right exchanges is priced at its nodes
+ * by the model's bond formula, so flows may fall between nodes. A decision between nodes is taken
+ * at the node before it.
+ */
+public final class TrinomialPricing {
+  /** The tree is refined by up to this factor to bring every decision onto nodes. */
+  private static final int MOST_REFINED = 3;
+
+  private static final double ON_NODE = 1e-7;
+
+  private TrinomialPricing() {}
+
+  /**
+   * The value; its error bound is twice the larger difference to two coarser trees, an estimate:
+   * the error falls like the step and not smoothly.
+   *
+   * @param steps to the last decision, at least 4; a few more where that brings the decisions onto
+   *     nodes
+   * @throws IllegalArgumentException as {@link TrinomialTree#of}
+   */
+  public static Valuation value(Claim claim, GaussianRates rates, int steps) {
+    Valuation flows = Discounting.value(claim.flows(), rates.curve());
+    if (claim.rights().isEmpty()) {
+      return flows;
+    }
+    if (!(steps >= 4)) {
+      throw new IllegalArgumentException("a tree needs at least 4 steps, found " + steps);
+    }
+    double fine = rightsValue(claim, rates, steps);
+    double half = rightsValue(claim, rates, steps / 2);
+    double most = rightsValue(claim, rates, 3 * steps / 4);
+    double bound = 2 * Math.max(Math.abs(fine - half), Math.abs(fine - most));
+    return new Valuation(flows.presentValue() + fine, Method.TRINOMIAL, flows.errorBound() + bound);
+  }
+
+  /** The value of the rights on one tree. */
+  static double rightsValue(Claim claim, GaussianRates rates, int steps) {
+    List<Right> rights = claim.rights();
+    double horizon = rights.get(rights.size() - 1).decision();
+    int left = rights.size() - 1;
+    double[] value = {0};
+    if (horizon > 0) {
+      TrinomialTree tree = TrinomialTree.of(rates, horizon, aligned(rights, horizon, steps));
+      double length = tree.stepLength();
+      value = new double[2 * tree.reach(tree.steps()) + 1];
+      for (int i = tree.steps(); i >= 0; i--) {
+        value = i < tree.steps() ? tree.back(i, value) : value;
+        while (left >= 0 && rights.get(left).decision() / length > i - ON_NODE) {
+          decide(claim, rights.get(left--), rates, tree, i, value);
+        }
+      }
+      return value[0];
+    }
+    for (; left >= 0; left--) {
+      Right right = rights.get(left);
+      CashFlows flows = ExerciseValue.exchanged(claim, right);
+      value[0] = chosen(right, value[0], Discounting.value(flows, rates.curve()).presentValue());
+    }
+    return value[0];
+  }
+
+  /** The least number of steps, not far above the wanted one, with all decisions on nodes. */
+  private static int aligned(List<Right> rights, double horizon, int steps) {
+    for (int n = steps; n <= MOST_REFINED * steps; n++) {
+      boolean all = true;
+      for (Right right : rights) {
+        double at = right.decision() / horizon * n;
+        all &= Math.abs(at - Math.rint(at)) < ON_NODE;
+      }
+      if (all) {
+        return n;
+      }
+    }
+    return steps;
+  }
+
+  /** Seen from the right's owner's side in {@code exchanged}, to the holder in {@code value}. */
+  private static double chosen(Right right, double hold, double exchanged) {
+    return right.party() == Party.HOLDER ? Math.max(hold, exchanged) : Math.min(hold, -exchanged);
+  }
+
+  private static void decide(
+      Claim claim, Right right, GaussianRates rates, TrinomialTree tree, int step, double[] value) {
+    CashFlows flows = ExerciseValue.exchanged(claim, right);
+    double t = step * tree.stepLength();
+    int reach = tree.reach(step);
+    double[] worth = new double[value.length];
+    double x = tree.state(step, -reach);
+    double by = tree.rateStep() * tree.stepLength() / rates.g(tree.stepLength());
+    for (int i = 0; i < flows.size(); i++) {
+      double time = Math.max(t, flows.time(i));
+      double bond = flows.amount(i) * Math.exp(rates.logBond(t, time, x));
+      double ratio = Math.exp(-rates.g(time - t) * by);
+      for (int k = 0; k < worth.length; k++) {
+        worth[k] += bond;
+        bond *= ratio;
+      }
+    }
+    for (int k = 0; k < value.length; k++) {
+      value[k] = chosen(right, value[k], worth[k]);
+    }
+  }
+}

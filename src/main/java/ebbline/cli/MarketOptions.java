@@ -54,6 +54,12 @@ final class MarketOptions {
       throw new UsageProblem("--curve FILE is missing: the discount curve to work on");
     }
     Optional<Interpolation> named = read("--interpolation", interpolation, Interpolation::of);
+    if (named.equals(Optional.of(Interpolation.SMITH_WILSON))) {
+      throw UsageProblem.of(
+          "--interpolation",
+          interpolation,
+          "expected log-linear, linear-zero, cubic or monotone-convex");
+    }
     if (curve.startsWith("flat:") && named.isPresent()) {
       throw UsageProblem.of(
           "--interpolation", interpolation, "a flat curve has no nodes to interpolate");

@@ -115,6 +115,13 @@ public final class CurveFile {
     private CurveInput nodes() {
       Interpolation named =
           setting("interpolation", Interpolation::of).orElse(Interpolation.LOG_LINEAR);
+      if (named == Interpolation.SMITH_WILSON && override.isEmpty()) {
+        problems.add(
+            table.settingProblem(
+                "interpolation",
+                "this version reads no smith-wilson curve from nodes; use log-linear, linear-zero,"
+                    + " cubic or monotone-convex"));
+      }
       for (String other : List.of("parameter", "value")) {
         if (table.hasColumn(other)) {
           problems.add(

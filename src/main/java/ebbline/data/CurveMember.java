@@ -85,6 +85,9 @@ final class CurveMember {
     } catch (IllegalArgumentException e) {
       throw name.wrong(e.getMessage());
     }
+    if (interpolation == Interpolation.SMITH_WILSON) {
+      throw name.wrong("a model file holds no smith-wilson curve");
+    }
     List<JsonValue> nodes = value.member("nodes").items();
     double[] times = new double[nodes.size()];
     double[] logs = new double[nodes.size()];

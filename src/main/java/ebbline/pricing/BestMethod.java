@@ -1,0 +1,26 @@
+package ebbline.pricing;
+
+import ebbline.instrument.Claim;
+import ebbline.model.GaussianRates;
+
+/** The most accurate method that a claim allows. */
+public final class BestMethod {
+  private BestMethod() {}
+
+  /** Discounting without rights, a closed form for one, backward induction for more. */
+  public static Valuation value(Claim claim, GaussianRates rates) {
+    if (claim.rights().isEmpty()) {
+      return Discounting.value(claim, rates.curve());
+    }
+    return ClosedForm.applies(claim)
+        ? ClosedForm.value(claim, rates)
+        : BackwardInduction.value(claim, rates);
+  }
+
+  /** What the claim's rights are worth to its holder, by the same choice. */
+  public static Valuation rightsValue(Claim claim, GaussianRates rates) {
+    return claim.rights().size() == 1
+        ? ClosedForm.rightValue(claim, rates)
+        : BackwardInduction.rightsValue(claim, rates);
+  }
+}

@@ -7,6 +7,8 @@ import java.io.Writer;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.AccessDeniedException;
 import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.FileAlreadyExistsException;
+import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
@@ -15,6 +17,8 @@ import java.nio.file.StandardOpenOption;
 
 /** Files that are whole or absent: written beside their place and moved into it. */
 public final class AtomicFile {
+  private static final int MOST_NAMES = 10_000;
+
   private AtomicFile() {}
 
   /** Writes the content of a file. */
@@ -32,27 +36,43 @@ public final class AtomicFile {
     if (Files.isDirectory(path)) {
       throw new OutputProblem(path.toString(), "it is a folder");
     }
-    Path folder = path.toAbsolutePath().getParent();
-    if (folder == null || !Files.isDirectory(folder)) {
-      throw new OutputProblem(path.toString(), "its folder does not exist");
-    }
     if (Files.exists(path) && !Files.isRegularFile(path)) {
       writeThrough(path, content); // a device or a pipe cannot be replaced
       return;
     }
     Path beside = null;
     try {
-      beside = Files.createTempFile(folder, "." + path.getFileName(), ".part");
+      // What a link points to is replaced, not the link.
+      Path target = Files.exists(path) ? path.toRealPath() : path.toAbsolutePath();
+      Path folder = target.getParent();
+      if (folder == null || !Files.isDirectory(folder)) {
+        throw new OutputProblem(path.toString(), "its folder does not exist");
+      }
+      beside = beside(folder);
       try (Writer writer = writer(beside)) {
         content.writeTo(writer);
       }
-      keepPermissions(path, beside);
-      move(beside, path);
+      keepPermissions(target, beside);
+      move(beside, target);
       beside = null;
     } catch (IOException e) {
       throw new OutputProblem(path.toString(), reason(e));
     } finally {
       remove(beside);
+    }
+  }
+
+  /** A new file that nobody else has, as open as the user's new files are. */
+  private static Path beside(Path folder) throws IOException {
+    long process = ProcessHandle.current().pid();
+    for (int i = 0; ; i++) {
+      try {
+        return Files.createFile(folder.resolve(".ebbline-" + process + "-" + i + ".part"));
+      } catch (FileAlreadyExistsException e) {
+        if (i == MOST_NAMES) {
+          throw e;
+        }
+      }
     }
   }
 
@@ -71,16 +91,10 @@ public final class AtomicFile {
     return Files.newBufferedWriter(path, StandardCharsets.UTF_8);
   }
 
-  /** Temporary files are private to their owner; a new output is as open as any other file. */
   private static void keepPermissions(Path path, Path beside) throws IOException {
-    if (!path.getFileSystem().supportedFileAttributeViews().contains("posix")) {
-      return;
-    }
-    if (Files.exists(path)) {
+    if (Files.exists(path)
+        && path.getFileSystem().supportedFileAttributeViews().contains("posix")) {
       Files.setPosixFilePermissions(beside, Files.getPosixFilePermissions(path));
-    } else {
-      Files.setPosixFilePermissions(
-          beside, java.nio.file.attribute.PosixFilePermissions.fromString("rw-r--r--"));
     }
   }
 
@@ -108,7 +122,8 @@ public final class AtomicFile {
     } else if (e instanceof NoSuchFileException) {
       return "its folder does not exist";
     }
-    String message = e.getMessage();
+    // A file system's own message starts with the path of the file beside.
+    String message = e instanceof FileSystemException f ? f.getReason() : e.getMessage();
     return message == null ? e.getClass().getSimpleName() : message;
   }
 }

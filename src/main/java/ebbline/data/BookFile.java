@@ -22,7 +22,7 @@ public final class BookFile {
    * @throws InputProblems if the file or its header cannot be used
    */
   public static BookFile open(String path) {
-    CsvTable table = CsvTable.open(SourceFile.read(path), BookColumns.LAYOUT);
+    CsvTable table = CsvTable.open(SourceFile.readBook(path), BookColumns.LAYOUT);
     if (!table.hasColumn("maturity")) {
       throw InputProblems.of(
           table.headerProblem("maturity", "the column is missing; every instrument needs it"));

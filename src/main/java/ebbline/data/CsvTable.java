@@ -1,13 +1,7 @@
 package ebbline.data;
 
-import com.opencsv.CSVReader;
-import com.opencsv.CSVReaderBuilder;
-import com.opencsv.RFC4180Parser;
-import com.opencsv.exceptions.CsvValidationException;
 import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
-import java.io.IOException;
-import java.io.StringReader;
 import java.util.ArrayList;
 import java.util.Collections;
 import java.util.HashMap;
@@ -23,14 +17,12 @@ import java.util.function.Consumer;
  * is wrong with a row is left to whoever reads the row.
  */
 final class CsvTable {
-  /** A quoted cell that runs over more lines than this is an unbalanced quote. */
-  private static final int MOST_LINES_A_RECORD = 50;
-
   private final SourceFile file;
   private final Map<String, Setting> settings;
   private final List<Column> columns;
   private final int headerLine;
   private final int bodyAt;
+  private final int bodyLine;
 
   /**
    * A line {@code # key: value}.
@@ -44,12 +36,13 @@ final class CsvTable {
       Map<String, Setting> settings,
       List<Column> columns,
       int headerLine,
-      int bodyAt) {
+      CsvRecords body) {
     this.file = file;
     this.settings = settings;
     this.columns = columns;
     this.headerLine = headerLine;
-    this.bodyAt = bodyAt;
+    this.bodyAt = body.at();
+    this.bodyLine = body.line();
   }
 
   /**
@@ -81,13 +74,17 @@ final class CsvTable {
               file.path(), 0, "", "", "there is no header row; a " + layout.kind() + " needs one"));
       throw new InputProblems(problems);
     }
-    int end = text.indexOf('\n', at);
-    String header = text.substring(at, end < 0 ? text.length() : end);
-    List<Column> columns = columns(file, layout, line, header, problems);
+    CsvRecords records = new CsvRecords(text, at, line);
+    CsvRecords.Cut header = records.next().orElseThrow(); // not blank: the loop above stopped at it
+    if (!header.problem().isEmpty()) {
+      problems.add(new InputProblem(file.path(), header.line(), "", "", header.problem()));
+      throw new InputProblems(problems);
+    }
+    List<Column> columns = columns(file, layout, line, header.cells(), problems);
     if (!problems.isEmpty()) {
       throw new InputProblems(problems);
     }
-    return new CsvTable(file, settings, columns, line, end < 0 ? text.length() : end + 1);
+    return new CsvTable(file, settings, columns, line, records);
   }
 
   private static void setting(
@@ -128,16 +125,13 @@ final class CsvTable {
   }
 
   private static List<Column> columns(
-      SourceFile file, Layout layout, int line, String header, List<InputProblem> problems) {
+      SourceFile file,
+      Layout layout,
+      int line,
+      List<String> headings,
+      List<InputProblem> problems) {
     List<Column> columns = new ArrayList<>();
     Map<String, String> seen = new HashMap<>();
-    String[] headings;
-    try {
-      headings = new RFC4180Parser().parseLine(header.strip());
-    } catch (IOException e) {
-      throw InputProblems.of(
-          new InputProblem(file.path(), line, "", header.strip(), "a quote is not closed"));
-    }
     for (String each : headings) {
       String heading = each.strip();
       Column column = Column.of(heading, layout);
@@ -211,129 +205,29 @@ final class CsvTable {
    * or too many, an unbalanced quote) go to the problems.
    */
   void forEachRow(List<InputProblem> problems, Consumer<CsvRow> reader) {
-    try (CSVReader csv =
-        new CSVReaderBuilder(new StringReader(file.text().substring(bodyAt)))
-            .withCSVParser(new RFC4180Parser())
-            .withMultilineLimit(MOST_LINES_A_RECORD)
-            .build()) {
-      int line = headerLine + 1;
-      while (true) {
-        String[] cells = csv.readNext();
-        if (cells == null) {
-          return;
-        }
-        int next = headerLine + 1 + (int) csv.getLinesRead();
-        if (cells.length > 1 || !cells[0].isBlank()) {
-          row(line, next, cells, problems, reader);
-        }
-        line = next;
-      }
-    } catch (IOException | CsvValidationException e) {
-      problems.add(
-          new InputProblem(
-              file.path(), unbalancedLine(), "", "", "a quote is opened and not closed"));
-    }
-  }
-
-  private void row(
-      int line, int next, String[] cells, List<InputProblem> problems, Consumer<CsvRow> reader) {
-    int bad = strayQuote(line, next);
-    if (bad > 0) {
-      problems.add(
-          new InputProblem(
-              file.path(),
-              bad,
-              "",
-              "",
-              "a quote stands inside a cell; put the whole cell in quotes and double those in it"));
-    } else if (cells.length != columns.size()) {
-      problems.add(
-          new InputProblem(
-              file.path(),
-              line,
-              "",
-              "",
-              "the row has "
-                  + cells.length
-                  + " cells, the header has "
-                  + columns.size()
-                  + "; give every row as many"));
-    } else {
-      reader.accept(new CsvRow(file.path(), line, columns, cells, problems));
-    }
-  }
-
-  /** The line of a quote that neither opens nor closes a cell, or 0; the parser accepts those. */
-  private int strayQuote(int line, int next) {
-    String record = lines(line, next);
-    if (record.indexOf('"') < 0) {
-      return 0;
-    }
-    boolean quoted = false;
-    int at = line;
-    for (int i = 0; i < record.length(); i++) {
-      char c = record.charAt(i);
-      if (c == '\n') {
-        at++;
-      } else if (c == '"' && quoted) {
-        char after = i + 1 < record.length() ? record.charAt(i + 1) : ',';
-        if (after == '"') {
-          i++;
-        } else if (after == ',' || after == '\r' || after == '\n') {
-          quoted = false;
-        } else {
-          return at;
-        }
-      } else if (c == '"') {
-        char before = i == 0 ? ',' : record.charAt(i - 1);
-        if (before != ',') {
-          return at;
-        }
-        quoted = true;
+    CsvRecords records = new CsvRecords(file.text(), bodyAt, bodyLine);
+    for (Optional<CsvRecords.Cut> next = records.next(); next.isPresent(); next = records.next()) {
+      CsvRecords.Cut cut = next.get();
+      if (!cut.problem().isEmpty()) {
+        problems.add(new InputProblem(file.path(), cut.line(), "", "", cut.problem()));
+      } else if (cut.cells().size() != columns.size()) {
+        problems.add(
+            new InputProblem(
+                file.path(),
+                cut.line(),
+                "",
+                "",
+                "the row has "
+                    + cut.cells().size()
+                    + (cut.cells().size() == 1 ? " cell" : " cells")
+                    + ", the header has "
+                    + columns.size()
+                    + "; give every row as many"));
+      } else {
+        reader.accept(
+            new CsvRow(
+                file.path(), cut.line(), columns, cut.cells().toArray(new String[0]), problems));
       }
     }
-    return 0;
-  }
-
-  private String lines(int from, int to) {
-    int start = offset(from);
-    int end = offset(to);
-    return file.text().substring(start, end);
-  }
-
-  private int lastLine = -1;
-  private int lastOffset;
-
-  /** Where a line starts; asked for in rising order, so that the file is walked once. */
-  private int offset(int line) {
-    if (lastLine < 0 || line < lastLine) {
-      lastLine = headerLine + 1;
-      lastOffset = bodyAt;
-    }
-    String text = file.text();
-    while (lastLine < line && lastOffset < text.length()) {
-      int end = text.indexOf('\n', lastOffset);
-      lastOffset = end < 0 ? text.length() : end + 1;
-      lastLine++;
-    }
-    return lastOffset;
-  }
-
-  /** The last line on which the number of quotes up to there is odd for the rest of the file. */
-  private int unbalancedLine() {
-    String text = file.text();
-    boolean open = false;
-    int opened = headerLine + 1;
-    int line = headerLine + 1;
-    for (int i = bodyAt; i < text.length(); i++) {
-      char c = text.charAt(i);
-      if (c == '"') {
-        open = !open;
-        opened = open ? line : opened;
-      } else if (c == '\n') {
-        line++;
-      }
-    }
-    return opened;
   }
 }

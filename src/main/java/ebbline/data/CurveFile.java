@@ -1,6 +1,7 @@
 package ebbline.data;
 
 import ebbline.curve.Compounding;
+import ebbline.curve.DiscountCurve;
 import ebbline.curve.FlatCurve;
 import ebbline.curve.InterpolatedCurve;
 import ebbline.curve.Interpolation;
@@ -22,6 +23,10 @@ import java.util.stream.Collectors;
 /** Curve files: nodes of discount factors or zero rates, or the parameters of a formula. */
 public final class CurveFile {
   private static final String FLAT = "flat:";
+
+  /** ln 1e300: beyond, figures made of discount factors overflow. */
+  private static final double FARTHEST_LOG = 300 * Math.log(10);
+
   private static final Layout LAYOUT =
       new Layout(
           "curve file",
@@ -165,13 +170,21 @@ public final class CurveFile {
       }
       throwIfAny();
       return new CurveInput(
-          InterpolatedCurve.of(
+          curve(
               override.orElse(named),
               times.stream().mapToDouble(Double::doubleValue).toArray(),
               logs.stream().mapToDouble(Double::doubleValue).toArray()),
           axis,
           labels,
           Optional.of(table.file()));
+    }
+
+    private DiscountCurve curve(Interpolation interpolation, double[] times, double[] logs) {
+      try {
+        return InterpolatedCurve.of(interpolation, times, logs);
+      } catch (IllegalArgumentException e) {
+        throw InputProblems.of(new InputProblem(table.file().path(), 0, "", "", e.getMessage()));
+      }
     }
 
     private void node(
@@ -223,24 +236,26 @@ public final class CurveFile {
     }
 
     private Optional<Double> logDiscount(CsvRow row, String column, double value, double time) {
-      if (column.equals("zero")) {
+      String wrong = "a discount factor must be above 0";
+      if (column.equals("zero") || value > 0) {
         try {
-          return Optional.of(compounding.logDiscount(value, time));
+          double log =
+              column.equals("zero") ? compounding.logDiscount(value, time) : Math.log(value);
+          if (Math.abs(log) <= FARTHEST_LOG) {
+            return Optional.of(log);
+          }
+          wrong = "a discount factor must lie between 1e-300 and 1e300; this one does not";
         } catch (IllegalArgumentException e) {
-          row.problem(column, row.text(column).orElseThrow(), e.getMessage());
-          return Optional.empty();
+          wrong = e.getMessage();
         }
       }
-      if (value > 0) {
-        return Optional.of(Math.log(value));
-      }
-      row.problem(column, row.text(column).orElseThrow(), "a discount factor must be above 0");
+      row.problem(column, row.text(column).orElseThrow(), wrong);
       return Optional.empty();
     }
 
     private void throwIfAny() {
       if (!problems.isEmpty()) {
-        throw new InputProblems(problems);
+        throw InFileOrder.of(problems);
       }
     }
   }

@@ -29,6 +29,7 @@ import java.util.Set;
  */
 record JsonValue(String source, String path, int line, int column, Object value) {
   private static final int DEEPEST = 20;
+  private static final int MOST_SHOWN = 80;
   private static final JsonFactory FACTORY =
       JsonFactory.builder()
           .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
@@ -108,8 +109,12 @@ record JsonValue(String source, String path, int line, int column, Object value)
             source,
             line,
             Integer.toString(column),
-            found.length() > 40 ? found.substring(0, 40) + "…" : found,
-            (path.isEmpty() ? "" : "member '" + path + "': ") + expected));
+            found,
+            (path.isEmpty() ? "" : "member '" + end(path) + "': ") + expected));
+  }
+
+  private static String end(String path) {
+    return path.length() <= MOST_SHOWN ? path : "…" + path.substring(path.length() - MOST_SHOWN);
   }
 
   /** Refuses members that are not known. */

@@ -5,6 +5,8 @@ import java.util.Locale;
 
 /** The known name that a mistyped one is closest to. */
 public final class NearestName {
+  private static final int MOST_COMPARED = 64; // no name is near to half of that
+
   private NearestName() {}
 
   /**
@@ -14,10 +16,12 @@ public final class NearestName {
    * @param known at least one
    */
   public static String of(String typed, Collection<String> known) {
+    String compared =
+        typed.substring(0, Math.min(typed.length(), MOST_COMPARED)).toLowerCase(Locale.ROOT);
     String best = "";
     int least = Integer.MAX_VALUE;
     for (String name : known) {
-      int edits = edits(typed.toLowerCase(Locale.ROOT), name.toLowerCase(Locale.ROOT));
+      int edits = edits(compared, name.toLowerCase(Locale.ROOT));
       if (edits < least) {
         least = edits;
         best = name;

@@ -54,16 +54,20 @@ final class ParametricRows {
       }
     }
     throwIfAny();
-    return form.equals("svensson")
-        ? SvenssonCurve.of(
-            values.get("beta0"),
-            values.get("beta1"),
-            values.get("beta2"),
-            values.get("beta3"),
-            values.get("tau1"),
-            values.get("tau2"))
-        : SvenssonCurve.nelsonSiegel(
-            values.get("beta0"), values.get("beta1"), values.get("beta2"), values.get("tau1"));
+    try {
+      return form.equals("svensson")
+          ? SvenssonCurve.of(
+              values.get("beta0"),
+              values.get("beta1"),
+              values.get("beta2"),
+              values.get("beta3"),
+              values.get("tau1"),
+              values.get("tau2"))
+          : SvenssonCurve.nelsonSiegel(
+              values.get("beta0"), values.get("beta1"), values.get("beta2"), values.get("tau1"));
+    } catch (IllegalArgumentException e) {
+      throw InputProblems.of(new InputProblem(table.file().path(), 0, "", "", e.getMessage()));
+    }
   }
 
   private void parameter(CsvRow row, List<String> wanted, Map<String, Double> values) {
@@ -99,7 +103,7 @@ final class ParametricRows {
 
   private void throwIfAny() {
     if (!problems.isEmpty()) {
-      throw new InputProblems(problems);
+      throw InFileOrder.of(problems);
     }
   }
 }

@@ -2,7 +2,9 @@ package ebbline.data;
 
 import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.ByteBuffer;
 import java.nio.charset.CharacterCodingException;
 import java.nio.charset.StandardCharsets;
@@ -23,19 +25,37 @@ import java.util.HexFormat;
  * @param sha256 of its bytes, hexadecimal
  */
 public record SourceFile(String path, String text, String sha256) {
-  private static final long LARGEST = 1L << 30;
+  private static final int LARGEST = 1 << 26;
+  private static final int LARGEST_BOOK = 1 << 30;
+  private static final int CHUNK = 1 << 16;
 
   /**
    * Reads a file whole.
    *
-   * @throws InputProblems if it is missing, a folder, empty, not readable, not UTF-8 text
+   * @throws InputProblems if it is missing, a folder, empty, not readable, not UTF-8 text, or
+   *     larger than 64 MiB
    */
   public static SourceFile read(String path) {
-    byte[] bytes = bytes(path);
+    return read(path, LARGEST, "64 MiB; curves, quotes, histories and models are smaller");
+  }
+
+  /** As {@link #read}, up to 1 GiB. */
+  static SourceFile readBook(String path) {
+    return read(path, LARGEST_BOOK, "1 GiB; split it");
+  }
+
+  private static SourceFile read(String path, int largest, String tooLarge) {
+    try {
+      return decoded(path, bytes(path, largest, tooLarge));
+    } catch (OutOfMemoryError e) {
+      throw problem(path, 0, "", "the file does not fit into memory; split it");
+    }
+  }
+
+  private static SourceFile decoded(String path, byte[] bytes) {
     if (bytes.length == 0) {
       throw problem(path, 0, "", "the file is empty");
     }
-    refuseOtherEncodings(path, bytes);
     int from =
         bytes.length >= 3
                 && bytes[0] == (byte) 0xEF
@@ -60,16 +80,26 @@ public record SourceFile(String path, String text, String sha256) {
     }
   }
 
-  private static byte[] bytes(String path) {
+  private static byte[] bytes(String path, int largest, String tooLarge) {
     try {
       Path file = Path.of(path);
       if (Files.isDirectory(file)) {
         throw problem(path, 0, "", "it is a folder; name a file in it");
       }
-      if (Files.exists(file) && Files.size(file) > LARGEST) {
-        throw problem(path, 0, "", "the file is larger than 1 GiB; split it");
+      // Neither a device nor a pipe knows its size, so that the bound is kept while reading.
+      ByteArrayOutputStream all =
+          new ByteArrayOutputStream((int) Math.min(largest, Files.size(file) + 1));
+      try (InputStream in = Files.newInputStream(file)) {
+        for (byte[] next = in.readNBytes(CHUNK); next.length > 0; next = in.readNBytes(CHUNK)) {
+          if (all.size() + (long) next.length > largest) {
+            throw problem(path, 0, "", "the file is larger than " + tooLarge);
+          }
+          boolean first = all.size() == 0;
+          all.write(next, 0, next.length);
+          refuseOtherEncodings(path, all, next, first);
+        }
       }
-      return Files.readAllBytes(file);
+      return all.toByteArray();
     } catch (NoSuchFileException e) {
       throw problem(path, 0, "", "there is no such file; check the path");
     } catch (AccessDeniedException e) {
@@ -81,17 +111,23 @@ public record SourceFile(String path, String text, String sha256) {
     }
   }
 
-  private static void refuseOtherEncodings(String path, byte[] bytes) {
+  private static void refuseOtherEncodings(
+      String path, ByteArrayOutputStream all, byte[] next, boolean first) {
     boolean wide =
-        bytes.length >= 2
-            && ((bytes[0] == (byte) 0xFE && bytes[1] == (byte) 0xFF)
-                || (bytes[0] == (byte) 0xFF && bytes[1] == (byte) 0xFE));
+        first
+            && next.length >= 2
+            && ((next[0] == (byte) 0xFE && next[1] == (byte) 0xFF)
+                || (next[0] == (byte) 0xFF && next[1] == (byte) 0xFE));
     if (wide) {
       throw problem(path, 1, "", "the text is UTF-16; save the file as UTF-8");
     }
-    for (int i = 0; i < bytes.length; i++) {
-      if (bytes[i] == 0) {
-        throw problem(path, lineOf(bytes, i), "", "the file is binary; a text file was expected");
+    for (int i = 0; i < next.length; i++) {
+      if (next[i] == 0) {
+        throw problem(
+            path,
+            lineOf(all.toByteArray(), all.size() - next.length + i),
+            "",
+            "the file is binary; a text file was expected");
       }
     }
   }

@@ -15,6 +15,7 @@ import java.util.Objects;
  * @param expected what is wrong and how to mend it, one sentence without the place
  */
 public record InputProblem(String source, int line, String column, String value, String expected) {
+  private static final int MOST_SHOWN = 60;
 
   public InputProblem {
     Objects.requireNonNull(source, "source");
@@ -38,11 +39,37 @@ public record InputProblem(String source, int line, String column, String value,
     }
     text.append(": ");
     if (!column.isEmpty() && !numbered) {
-      text.append("column '").append(column).append("': ");
+      text.append("column '").append(start(column)).append("': ");
     }
     if (!value.isEmpty()) {
-      text.append("found '").append(value).append("': ");
+      text.append("found '").append(start(value)).append("': ");
     }
-    return text.append(expected).toString();
+    return onOneLine(text.append(expected).toString());
+  }
+
+  /** As much of a text as a message can carry. */
+  private static String start(String text) {
+    return text.codePointCount(0, text.length()) <= MOST_SHOWN
+        ? text
+        : text.substring(0, text.offsetByCodePoints(0, MOST_SHOWN)) + "…";
+  }
+
+  /** Characters of the user's text that break lines or steer a terminal are shown as a dot. */
+  private static String onOneLine(String text) {
+    StringBuilder shown = new StringBuilder(text.length());
+    text.codePoints()
+        .forEach(
+            c ->
+                shown.appendCodePoint(
+                    switch (Character.getType(c)) {
+                      case Character.CONTROL,
+                          Character.FORMAT,
+                          Character.LINE_SEPARATOR,
+                          Character.PARAGRAPH_SEPARATOR,
+                          Character.SURROGATE ->
+                          '·';
+                      default -> c;
+                    }));
+    return shown.toString();
   }
 }

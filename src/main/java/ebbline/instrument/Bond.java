@@ -1,10 +1,12 @@
 package ebbline.instrument;
 
+import ebbline.time.BusinessCalendar;
+import ebbline.time.CouponPeriod;
 import ebbline.time.DayCount;
+import ebbline.time.Frequency;
 import ebbline.time.Moment;
 import ebbline.time.TimeAxis;
 import java.time.LocalDate;
-import java.time.temporal.ChronoUnit;
 import java.util.List;
 import java.util.Objects;
 
@@ -38,9 +40,7 @@ public record Bond(
     if (!Double.isFinite(coupon)) {
       throw new IllegalArgumentException("coupon must be finite, found " + coupon);
     }
-    if (frequency != 1 && frequency != 2 && frequency != 4 && frequency != 12) {
-      throw new IllegalArgumentException("frequency must be 1, 2, 4 or 12, found " + frequency);
-    }
+    Frequency.of(frequency);
     if (settleDays < 0) {
       throw new IllegalArgumentException("settle_days must be at least 0, found " + settleDays);
     }
@@ -63,14 +63,7 @@ public record Bond(
   }
 
   private LocalDate settlement(TimeAxis axis) {
-    LocalDate day = axis.asOf().orElseThrow();
-    for (int left = settleDays; left > 0; ) {
-      day = day.plusDays(1);
-      if (day.getDayOfWeek().getValue() <= 5) {
-        left--;
-      }
-    }
-    return day;
+    return BusinessCalendar.WEEKENDS.plusBusinessDays(axis.asOf().orElseThrow(), settleDays);
   }
 
   /** Coupons and redemption after a time. */
@@ -118,16 +111,16 @@ public record Bond(
     if (!axis.isDated(maturity) || dayCount == DayCount.ACT_ACT_ICMA) {
       return 100 * coupon / frequency;
     }
-    CouponDates dates = dates(axis);
-    return 100 * coupon * days(dates.before(back + 1), dates.before(back)) / 365.0;
+    CouponPeriod period = period(back, axis);
+    return 100 * coupon * dayCount.periodYears(period);
   }
 
   /** Accrued interest at a time, per 100 face. */
   double accrued(double time, TimeAxis axis) {
     int n = countAfter(time, axis);
-    if (axis.isDated(maturity) && dayCount == DayCount.ACT_365F) {
-      LocalDate start = dates(axis).before(n);
-      return 100 * coupon * days(start, dateAt(time, axis)) / 365.0;
+    if (axis.isDated(maturity) && dayCount != DayCount.ACT_ACT_ICMA) {
+      CouponPeriod period = period(n - 1, axis);
+      return 100 * coupon * dayCount.years(period.start(), dateAt(time, axis), period);
     }
     return 100 * coupon / frequency * (1 - toNext(time, n, axis));
   }
@@ -139,19 +132,22 @@ public record Bond(
       // A coupon just now belongs to the past, so a whole period is left, to the last bit.
       return Math.abs(periods - 1) <= frequency * TimeAxis.SAME_MOMENT ? 1 : periods;
     }
+    CouponPeriod period = period(n - 1, axis);
+    long whole = dayCount.periodDays(period);
+    return (whole - dayCount.days(period.start(), dateAt(time, axis), period)) / (double) whole;
+  }
+
+  /** The regular period that ends {@code back} periods before maturity. */
+  private CouponPeriod period(int back, TimeAxis axis) {
     CouponDates dates = dates(axis);
-    LocalDate next = dates.before(n - 1);
-    return days(dateAt(time, axis), next) / (double) days(dates.before(n), next);
+    return CouponPeriod.regular(
+        dates.before(back + 1), dates.before(back), Frequency.of(frequency), dates.maturity());
   }
 
   private static LocalDate dateAt(double time, TimeAxis axis) {
     return axis.asOf()
         .orElseThrow()
         .plusDays(Math.round(time / axis.years(axis.asOf().orElseThrow().plusDays(1))));
-  }
-
-  private static long days(LocalDate from, LocalDate to) {
-    return ChronoUnit.DAYS.between(from, to);
   }
 
   /** The flows after settlement in coupon periods, for price and yield. */

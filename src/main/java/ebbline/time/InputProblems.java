@@ -15,6 +15,9 @@ public final class InputProblems extends RuntimeException {
   public InputProblems(List<InputProblem> problems) {
     super(problems.stream().map(InputProblem::message).collect(Collectors.joining("\n")));
     this.problems = List.copyOf(problems);
+    if (problems.isEmpty()) {
+      throw new IllegalArgumentException("an unusable input must have a problem, found none");
+    }
   }
 
   public static InputProblems of(InputProblem problem) {

@@ -55,8 +55,8 @@ public sealed interface Moment {
   /**
    * Reads a date {@code 2031-11-15}, a tenor {@code 1Y6M} or a bare number of years {@code 0.25}.
    *
-   * @throws IllegalArgumentException if the text is none of them; the message says what was
-   *     expected and does not repeat the text
+   * @throws IllegalArgumentException if the text is none of them, or a bare number beyond ±1000, or
+   *     no day in the calendar; the message says what was expected and does not repeat the text
    */
   static Moment parse(String text) {
     return MomentText.parse(text);

@@ -8,6 +8,7 @@ import java.util.regex.Pattern;
 final class MomentText {
   static final String EXPECTED =
       "a date 2031-11-15, a tenor such as 3M, 10Y or 1Y6M, or a number of years such as 0.25";
+  private static final double MOST_YEARS = 1000;
   private static final Pattern DATE = Pattern.compile("\\d{4}-\\d{2}-\\d{2}");
   private static final Pattern NUMBER =
       Pattern.compile("[+-]?(\\d+(\\.\\d*)?|\\.\\d+)([eE][+-]?\\d+)?");
@@ -25,9 +26,12 @@ final class MomentText {
     }
     if (NUMBER.matcher(t).matches()) {
       double years = Double.parseDouble(t);
-      if (Double.isFinite(years)) {
+      if (Math.abs(years) <= MOST_YEARS) {
         return Moment.ofYears(years);
       }
+      // 20311115 is a date without its hyphens, not twenty million years.
+      throw new IllegalArgumentException(
+          "a number of years must lie within -1000 to 1000; a date is written 2031-11-15");
     }
     if (Tenor.isTenor(t)) {
       return Moment.of(Tenor.parse(t));

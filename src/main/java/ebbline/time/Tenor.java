@@ -8,12 +8,26 @@ import java.util.regex.Pattern;
 /**
  * A length of calendar time, {@code 1D 2W 6M 18M 10Y 1Y6M}: whole months and whole days.
  *
- * @param months years count as twelve
- * @param days weeks count as seven
+ * @param months years count as twelve; 0 to 11,999
+ * @param days weeks count as seven; 0 to 99,999
  */
 public record Tenor(int months, int days) {
   private static final Pattern FORM =
       Pattern.compile("(?:(\\d{1,3})Y)?(?:(\\d{1,4})M)?(?:(\\d{1,4})W)?(?:(\\d{1,5})D)?");
+
+  private static final int MOST_MONTHS = 12 * 1000 - 1;
+  private static final int MOST_DAYS = 99_999;
+
+  public Tenor {
+    if (!(months >= 0 && months <= MOST_MONTHS && days >= 0 && days <= MOST_DAYS)) {
+      throw new IllegalArgumentException(
+          "a tenor must be 0 to 11999 months and 0 to 99999 days, found "
+              + months
+              + " months and "
+              + days
+              + " days");
+    }
+  }
 
   static boolean isTenor(String text) {
     return !text.isEmpty() && FORM.matcher(text.toUpperCase(Locale.ROOT)).matches();
@@ -22,7 +36,7 @@ public record Tenor(int months, int days) {
   /**
    * Reads {@code 1Y6M}; either case, at least one part, parts in the order Y M W D.
    *
-   * @throws IllegalArgumentException if the text is not a tenor
+   * @throws IllegalArgumentException if the text is not a tenor, or one too long
    */
   public static Tenor parse(String text) {
     Matcher m = FORM.matcher(text.strip().toUpperCase(Locale.ROOT));

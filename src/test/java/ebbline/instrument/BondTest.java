@@ -171,4 +171,32 @@ class BondTest {
         .hasMessageContaining("maturity must lie after settlement or expiry");
     assertThatThrownBy(() -> OptionKind.of("straddle")).hasMessage("expected call or put");
   }
+
+  @Test
+  void couponsAndAccrualFollowTheDayCount() {
+    TimeAxis axis = TimeAxis.from(LocalDate.of(2024, 3, 31));
+    // 31 August 2023 to 29 February 2024 to 31 August 2024; 31 days into 184.
+    record Expected(DayCount count, double coupon, double accrued) {}
+    for (Expected e :
+        new Expected[] {
+          new Expected(DayCount.ACT_ACT_ICMA, 1 / 2.0, 31 / 368.0),
+          new Expected(DayCount.ACT_ACT_ISDA, 184 / 366.0, 31 / 366.0),
+          new Expected(DayCount.ACT_365F, 184 / 365.0, 31 / 365.0),
+          new Expected(DayCount.ACT_365L, 184 / 366.0, 31 / 366.0),
+          new Expected(DayCount.ACT_360, 184 / 360.0, 31 / 360.0),
+          new Expected(DayCount.THIRTY_360, 1 / 2.0, 32 / 360.0),
+          new Expected(DayCount.THIRTY_U_360, 1 / 2.0, 30 / 360.0),
+          new Expected(DayCount.THIRTY_E_360, 1 / 2.0, 31 / 360.0),
+          new Expected(DayCount.THIRTY_E_360_ISDA, 1 / 2.0, 30 / 360.0),
+          // 29 February 2024 is a Thursday, 31 August a Saturday: 132 weekdays, 22 of them gone.
+          new Expected(DayCount.BUS_252, 132 / 252.0, 22 / 252.0)
+        }) {
+      Bond bond = new Bond(Moment.parse("2024-08-31"), 0.06, 2, e.count(), 100, 0);
+      Claim claim = bond.claim(axis);
+      assertThat(claim.flows().amounts())
+          .as(e.count().label())
+          .containsExactly(new double[] {100 + 6 * e.coupon()}, within(3e-14));
+      assertThat(claim.accrued()).as(e.count().label()).isCloseTo(6 * e.accrued(), within(1e-15));
+    }
+  }
 }

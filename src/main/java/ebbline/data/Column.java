@@ -14,10 +14,10 @@ record Column(String heading, String name, RateText.Unit unit, boolean carried) 
     if (heading.startsWith("x-")) {
       return new Column(heading, heading, RateText.Unit.WRITTEN, true);
     }
-    if (heading.endsWith("_pct") && layout.rates().contains(stem(heading, 4))) {
+    if (heading.endsWith("_pct") && layout.isRate(stem(heading, 4))) {
       return new Column(heading, stem(heading, 4), RateText.Unit.PER_CENT, false);
     }
-    if (heading.endsWith("_bp") && layout.rates().contains(stem(heading, 3))) {
+    if (heading.endsWith("_bp") && layout.isRate(stem(heading, 3))) {
       return new Column(heading, stem(heading, 3), RateText.Unit.BASIS_POINTS, false);
     }
     return new Column(heading, heading, RateText.Unit.WRITTEN, false);
@@ -28,6 +28,6 @@ record Column(String heading, String name, RateText.Unit unit, boolean carried) 
   }
 
   boolean isKnown(Layout layout) {
-    return carried || layout.columns().contains(name) || layout.rates().contains(name);
+    return carried || layout.columns().contains(name) || layout.isRate(name);
   }
 }

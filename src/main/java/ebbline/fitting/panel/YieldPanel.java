@@ -98,8 +98,8 @@ public final class YieldPanel {
     return maturities[column];
   }
 
-  /** NaN where the cell is missing. */
-  double cell(int row, int column) {
+  /** A yield; NaN where the cell is missing. */
+  public double cell(int row, int column) {
     return yields[row][column];
   }
 

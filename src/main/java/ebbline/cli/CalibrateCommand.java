@@ -48,9 +48,11 @@ import picocli.CommandLine.Option;
       "A calculation aid, not advice.",
       "",
       "Examples (from the project's root):",
-      "  ebbline calibrate --model vasicek --curve curves/saltmere.csv --fix volatility=0.9%%",
-      "  ebbline calibrate --model hull-white --mean-reversion 0.05 --volatility 0.9%% --curve"
-          + " curves/saltmere.csv --format json"
+      "  java -jar target/ebbline.jar calibrate --model vasicek \\",
+      "    --curve curves/saltmere.csv --fix volatility=0.9%%",
+      "  java -jar target/ebbline.jar calibrate --model hull-white \\",
+      "    --mean-reversion 0.05 --volatility 0.9%% --curve curves/saltmere.csv \\",
+      "    --format json"
     })
 final class CalibrateCommand implements Callable<Integer> {
   @Mixin private MarketOptions market;

@@ -25,8 +25,9 @@ import picocli.CommandLine.Option;
       "A calculation aid, not advice.",
       "",
       "Examples (from the project's root):",
-      "  ebbline curve --curve curves/saltmere.csv",
-      "  ebbline curve --curve curves/saltmere-svensson.csv --at 1Y,5Y,10Y,2036-11-30 --format csv"
+      "  java -jar target/ebbline.jar curve --curve curves/saltmere.csv",
+      "  java -jar target/ebbline.jar curve --curve curves/saltmere-svensson.csv \\",
+      "    --at 1Y,5Y,10Y,2036-11-30 --format csv"
     })
 final class CurveCommand implements Callable<Integer> {
   /** Where a curve from a formula is shown if nobody says otherwise, years. */

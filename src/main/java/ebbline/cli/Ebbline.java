@@ -25,8 +25,9 @@ import picocli.CommandLine.Spec;
           + " prevail.",
       "",
       "Examples (from the project's root):",
-      "  ebbline price --curve curves/saltmere.csv --book examples/book.csv",
-      "  ebbline verify --topic Vasicek"
+      "  java -jar target/ebbline.jar price --model hull-white --mean-reversion 0.05 \\",
+      "    --volatility 0.9%% --curve curves/saltmere.csv --book examples/book.csv",
+      "  java -jar target/ebbline.jar verify --topic Vasicek"
     },
     subcommands = {
       CurveCommand.class,

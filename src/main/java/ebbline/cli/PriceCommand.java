@@ -40,11 +40,11 @@ import picocli.CommandLine.Option;
           + " prevail.",
       "",
       "Examples (from the project's root):",
-      "  ebbline price --model hull-white --mean-reversion 0.05 --volatility 0.9%% --curve"
-          + " curves/saltmere.csv --book examples/book.csv",
-      "  ebbline price --model vasicek --short-rate 5%% --long-run-mean 8%% --mean-reversion 0.1"
-          + " --volatility 1.5%% --row 'instrument=zero-option kind=call expiry=1 maturity=3"
-          + " strike=87' --format json"
+      "  java -jar target/ebbline.jar price --model hull-white --mean-reversion 0.05 \\",
+      "    --volatility 0.9%% --curve curves/saltmere.csv --book examples/book.csv",
+      "  java -jar target/ebbline.jar price --model vasicek --short-rate 5%% \\",
+      "    --long-run-mean 8%% --mean-reversion 0.1 --volatility 1.5%% --format json \\",
+      "    --row 'instrument=zero-option kind=call expiry=1 maturity=3 strike=87'"
     })
 final class PriceCommand implements Callable<Integer> {
   @Mixin private MarketOptions market;

@@ -32,8 +32,8 @@ import picocli.CommandLine.Option;
       "A calculation aid, not advice.",
       "",
       "Examples (from the project's root):",
-      "  ebbline verify --summary",
-      "  ebbline verify --topic Hull-White --format csv"
+      "  java -jar target/ebbline.jar verify --summary",
+      "  java -jar target/ebbline.jar verify --topic Hull-White --format csv"
     })
 final class VerifyCommand implements Callable<Integer> {
   @Mixin private OutputOptions output;

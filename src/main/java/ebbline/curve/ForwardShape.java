@@ -62,11 +62,14 @@ final class ForwardShape {
   }
 
   /**
-   * Whether g comes to g₀ and g₁ at its ends. A piece narrower than 1e-9 of the interval is a jump:
-   * it comes from averages that are equal but for rounding.
+   * Whether g comes to g₀ and g₁ at its ends. A parabola narrower than 1e-9 of the interval is a
+   * jump: it comes from averages that are equal but for rounding. The flat part of a shape may be
+   * as narrow as it likes.
    */
   boolean isContinuous() {
-    return parabola || (eta > NARROW && eta < 1 - NARROW);
+    boolean falls = level != g0;
+    boolean rises = level != g1;
+    return parabola || ((!falls || eta > NARROW) && (!rises || eta < 1 - NARROW));
   }
 
   /**

@@ -249,4 +249,23 @@ class InterpolatedCurveTest {
     assertThatThrownBy(() -> Interpolation.of("spline")).hasMessageContaining("monotone-convex");
     assertThat(Interpolation.of(" Log-Linear ")).isEqualTo(Interpolation.LOG_LINEAR);
   }
+
+  @Test
+  void anOrdinaryMonotoneConvexCurveHasNoJumpAtItsEnds() {
+    // At both ends the shape sits on the border of two regions, within rounding.
+    Random random = new Random(9);
+    for (int i = 0; i < 200; i++) {
+      double[] times = {0.5, 1, 2, 3.5};
+      double[] logs = new double[4];
+      double log = 0;
+      for (int k = 0; k < 4; k++) {
+        log -= (times[k] - (k == 0 ? 0 : times[k - 1])) * (0.02 + 0.03 * random.nextDouble());
+        logs[k] = log;
+      }
+      assertThat(
+              InterpolatedCurve.of(Interpolation.MONOTONE_CONVEX, times, logs)
+                  .hasContinuousForward())
+          .isTrue();
+    }
+  }
 }

@@ -67,10 +67,14 @@ final class CurveCommand implements Callable<Integer> {
     double time =
         MarketOptions.read("--at", maturity, text -> input.axis().years(Moment.parse(text)))
             .orElseThrow();
-    if (time >= 0) {
+    if (!(time >= 0)) {
+      throw UsageProblem.of("--at", maturity, "a maturity must not lie before the as-of date");
+    }
+    if (Double.isFinite(input.curve().discount(time))) {
       return time;
     }
-    throw UsageProblem.of("--at", maturity, "a maturity must not lie before the as-of date");
+    throw UsageProblem.of(
+        "--at", maturity, "the curve's discount factor there is larger than can be counted");
   }
 
   private static ResultRow row(String maturity, double time, DiscountCurve curve) {

@@ -15,8 +15,6 @@ import java.util.stream.Collectors;
  * missing observation. Settings: {@code step}, and {@code source} for the reader of the file.
  */
 public final class HistoryFile {
-  private static final double LARGEST = 100; // 10,000 % a year
-
   private HistoryFile() {}
 
   /**
@@ -46,7 +44,7 @@ public final class HistoryFile {
     table.forEachRow(
         problems,
         row -> {
-          OptionalDouble rate = rate(row, chosen.name());
+          OptionalDouble rate = row.rate(chosen.name());
           if (times.add(row)) {
             rates.add(rate.orElse(Double.NaN)); // the history's own sign for a missing rate
           }
@@ -63,15 +61,6 @@ public final class HistoryFile {
         chosen.heading(),
         times.dates(),
         table.file());
-  }
-
-  private static OptionalDouble rate(CsvRow row, String name) {
-    OptionalDouble rate = row.rate(name);
-    if (rate.isPresent() && !(Math.abs(rate.getAsDouble()) <= LARGEST)) {
-      row.problem(
-          name, row.text(name).orElseThrow(), "a rate must lie within 10000 % either side of 0");
-    }
-    return rate;
   }
 
   private static Column chosen(

@@ -13,6 +13,9 @@ public final class RateText {
   private static final Pattern FORM =
       Pattern.compile("([+-]?(?:\\d+(?:\\.\\d*)?|\\.\\d+)(?:[eE][+-]?\\d{1,3})?)\\s*(%|[bB][pP])?");
 
+  /** 10,000 % a year: what is larger was not meant, and its powers overflow. */
+  private static final double LARGEST = 100;
+
   private RateText() {}
 
   /** The unit in which bare numbers of a rate column stand. */
@@ -83,9 +86,9 @@ public final class RateText {
 
   private static double finite(BigDecimal number) {
     double value = number.doubleValue();
-    if (Double.isFinite(value)) {
+    if (Math.abs(value) <= LARGEST) {
       return value;
     }
-    throw new IllegalArgumentException("expected a rate of ordinary size");
+    throw new IllegalArgumentException("a rate must lie between -100 and 100 (10000 %)");
   }
 }

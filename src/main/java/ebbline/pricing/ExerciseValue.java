@@ -19,6 +19,8 @@ final class ExerciseValue {
   /** Beyond this many deviations a normal density is below the smallest double. */
   private static final double REACH = 39;
 
+  private static final double LARGEST_SHIFT = 1e150; // its square must be finite
+
   private static final double ROUNDING = Math.ulp(1.0);
 
   private final double[] worth;
@@ -61,6 +63,11 @@ final class ExerciseValue {
     double[] logs = new double[n];
     int count = 0;
     for (double[] flow : flows) {
+      // A bond that is worth more than any double would leave the sums without an answer.
+      if (!(flow[0] < LARGEST_SHIFT && Double.isFinite(flow[1]))) {
+        throw new IllegalArgumentException(
+            "under these parameters a flow is worth more than can be counted; they are too extreme");
+      }
       boolean same = count > 0 && shifts[count - 1] == flow[0];
       int k = same ? count - 1 : count++;
       shifts[k] = flow[0];

@@ -136,7 +136,7 @@ class HistoryFileTest {
             "F:5: column 'date': found 'soon': expected a date 2031-11-15, a tenor such as 3M, 10Y"
                 + " or 1Y6M, or a number of years such as 0.25",
             "F:6: column 'date': a value is missing",
-            "F:7: column 'rate': found '20000%': a rate must lie within 10000 % either side of 0",
+            "F:7: column 'rate': found '20000%': a rate must lie between -100 and 100 (10000 %)",
             "F:8: column 'date': found '1': expected a date such as 2026-11-30");
     assertThat(problems("rate\n1%\n", Optional.empty(), Optional.empty()))
         .containsExactly(

@@ -71,6 +71,16 @@ class RateTextTest {
   }
 
   @Test
+  void ratesEndAtTenThousandPerCent() {
+    assertThat(RateText.parse("10000%")).isEqualTo(100);
+    assertThat(RateText.parse("-10000", RateText.Unit.PER_CENT)).isEqualTo(-100);
+    for (String text : List.of("10000.1%", "-1e300%", "1000001bp", "1e999%")) {
+      assertThatThrownBy(() -> RateText.parse(text))
+          .hasMessage("a rate must lie between -100 and 100 (10000 %)");
+    }
+  }
+
+  @Test
   void theRemedyIsNamedWhereItCanBeGuessed() {
     assertThatThrownBy(() -> RateText.parse("4,25%")).hasMessageContaining("separator is a point");
     assertThatThrownBy(() -> RateText.parse("1,000")).hasMessageContaining("thousands separators");

@@ -50,12 +50,17 @@ final class CsvRow {
 
   /** The cell without blanks around it; empty where the column or the value is not given. */
   Optional<String> text(String name) {
+    int at = index(name);
+    return at < 0 ? Optional.empty() : cell(at);
+  }
+
+  private int index(String name) {
     for (int i = 0; i < columns.size(); i++) {
       if (columns.get(i).name().equals(name)) {
-        return cell(i);
+        return i;
       }
     }
-    return Optional.empty();
+    return -1;
   }
 
   Optional<String> cell(int column) {
@@ -78,11 +83,8 @@ final class CsvRow {
   }
 
   private String heading(String name) {
-    return columns.stream()
-        .filter(c -> c.name().equals(name))
-        .map(Column::heading)
-        .findFirst()
-        .orElse(name);
+    int at = index(name);
+    return at < 0 ? name : columns.get(at).heading();
   }
 
   /** A value that the reader turns into something, or a problem with the reader's words. */
@@ -104,12 +106,8 @@ final class CsvRow {
   }
 
   OptionalDouble rate(String name) {
-    RateText.Unit unit =
-        columns.stream()
-            .filter(c -> c.name().equals(name))
-            .map(Column::unit)
-            .findFirst()
-            .orElse(RateText.Unit.WRITTEN);
+    int at = index(name);
+    RateText.Unit unit = at < 0 ? RateText.Unit.WRITTEN : columns.get(at).unit();
     return asDouble(value(name, text -> RateText.parse(text, unit)));
   }
 

@@ -17,6 +17,10 @@ public final class NumberText {
    */
   public static double parse(String text) {
     String t = text.strip();
+    double plain = PlainDecimal.parse(t, t.length(), 0);
+    if (!Double.isNaN(plain)) {
+      return plain;
+    }
     if (NUMBER.matcher(t).matches()) {
       double value = Double.parseDouble(t);
       if (Double.isFinite(value)) {

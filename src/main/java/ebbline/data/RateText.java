@@ -49,6 +49,10 @@ public final class RateText {
    */
   public static double parse(String text, Unit unit) {
     String t = text.strip();
+    double plain = plain(t, unit);
+    if (Math.abs(plain) <= LARGEST) {
+      return plain + 0.0; // a rate of -0 is 0
+    }
     Matcher m = FORM.matcher(t);
     if (!m.matches() || t.length() > 60) {
       throw new IllegalArgumentException(
@@ -77,6 +81,20 @@ public final class RateText {
               plain(number.movePointLeft(2))));
     }
     return finite(number);
+  }
+
+  /**
+   * The rate where it is a plain number, with % or without; NaN where that is to be looked into.
+   */
+  private static double plain(String t, Unit unit) {
+    if (unit != Unit.WRITTEN) {
+      return PlainDecimal.parse(t, t.length(), unit.shift);
+    }
+    if (t.endsWith("%")) {
+      return PlainDecimal.parse(t, t.length() - 1, 2);
+    }
+    double bare = PlainDecimal.parse(t, t.length(), 0);
+    return Math.abs(bare) < 1 ? bare : Double.NaN;
   }
 
   private static String plain(BigDecimal number) {

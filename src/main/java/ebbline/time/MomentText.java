@@ -19,7 +19,7 @@ final class MomentText {
     String t = text.strip();
     if (DATE.matcher(t).matches()) {
       try {
-        return Moment.of(LocalDate.parse(t));
+        return Moment.of(LocalDate.of(digits(t, 0, 4), digits(t, 5, 7), digits(t, 8, 10)));
       } catch (DateTimeException e) {
         throw new IllegalArgumentException("no such day in the calendar", e);
       }
@@ -37,5 +37,9 @@ final class MomentText {
       return Moment.of(Tenor.parse(t));
     }
     throw new IllegalArgumentException("expected " + EXPECTED);
+  }
+
+  private static int digits(String text, int from, int to) {
+    return Integer.parseInt(text, from, to, 10); // a general date parser takes ten times as long
   }
 }

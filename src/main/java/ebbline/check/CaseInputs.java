@@ -48,6 +48,11 @@ final class CaseInputs {
     return asNumber(member(name));
   }
 
+  /** A number that may be left out. */
+  double number(String name, double otherwise) {
+    return has(name) ? number(name) : otherwise;
+  }
+
   int integer(String name) {
     double value = number(name);
     if (value != Math.rint(value)) {

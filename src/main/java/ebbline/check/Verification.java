@@ -14,6 +14,7 @@ public final class Verification {
   public static List<String> topics() {
     Set<String> topics = new LinkedHashSet<>();
     PublishedCases.read("short-rate").forEach(c -> topics.add(c.topic()));
+    PublishedCases.read("bonds").forEach(c -> topics.add(c.topic()));
     return List.copyOf(topics);
   }
 
@@ -25,6 +26,7 @@ public final class Verification {
   public static List<CaseResult> run(Predicate<PublishedCase> wanted) {
     List<CaseResult> results = new ArrayList<>();
     results.addAll(run(new ShortRateCases(), "short-rate", wanted));
+    results.addAll(run(new BondCases(), "bonds", wanted));
     return List.copyOf(results);
   }
 

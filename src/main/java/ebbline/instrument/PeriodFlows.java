@@ -5,6 +5,8 @@ package ebbline.instrument;
  * yield are made of. One flow a period, per 100 face.
  */
 public final class PeriodFlows {
+  private static final double LONGEST_FIRST = 2;
+
   private final int frequency;
   private final double toFirst;
   private final double[] amounts;
@@ -13,13 +15,14 @@ public final class PeriodFlows {
    * Takes what a bond still pays.
    *
    * @param frequency periods a year
-   * @param toFirst fraction of a period from settlement to the first flow, above 0, at most 1
+   * @param toFirst periods from settlement to the first flow, above 0; over 1 only by the
+   *     conventions that count actual days against a period of 180
    * @param amounts one a period; not empty
    */
-  PeriodFlows(int frequency, double toFirst, double[] amounts) {
-    if (!(toFirst > 0 && toFirst <= 1) || amounts.length == 0) {
+  public PeriodFlows(int frequency, double toFirst, double[] amounts) {
+    if (!(toFirst > 0 && toFirst <= LONGEST_FIRST) || amounts.length == 0) {
       throw new IllegalArgumentException(
-          "a bond's next flow lies within a period after settlement, found "
+          "a bond's next flow lies within two periods after settlement, found "
               + toFirst
               + " periods and "
               + amounts.length

@@ -14,6 +14,7 @@ import ebbline.pricing.RowPricer;
 import ebbline.report.OutputFormat;
 import ebbline.report.PriceReport;
 import ebbline.report.ResultRow;
+import ebbline.time.CalendarRegistry;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -74,6 +75,7 @@ final class PriceCommand implements Callable<Integer> {
       description = "show the flows of the row with this id, their discount factors and values")
   private String explain;
 
+  @Mixin private HolidayOptions holidays;
   @Mixin private OutputOptions output;
 
   private boolean failed;
@@ -84,7 +86,8 @@ final class PriceCommand implements Callable<Integer> {
     if (book == null && rows.isEmpty()) {
       throw new UsageProblem("nothing to price: give --book FILE or --row 'KEY=VALUE …'");
     }
-    Optional<BookFile> file = Optional.ofNullable(book).map(BookFile::open);
+    CalendarRegistry calendars = holidays.calendars();
+    Optional<BookFile> file = Optional.ofNullable(book).map(path -> BookFile.open(path, calendars));
     Optional<Method> wanted = method();
     List<Optional<SourceFile>> files = new ArrayList<>();
     Market priced = market(files);
@@ -94,7 +97,7 @@ final class PriceCommand implements Callable<Integer> {
     file.ifPresent(f -> f.forEach(entry -> results.addAll(results(entry, pricer, priced))));
     int number = results.size();
     for (String row : rows) {
-      results.addAll(results(entry(row, ++number), pricer, priced));
+      results.addAll(results(entry(row, ++number, calendars), pricer, priced));
     }
     if (explain != null && !explained) {
       throw UsageProblem.of("--explain", explain, "no row of this run has this id");
@@ -137,9 +140,9 @@ final class PriceCommand implements Callable<Integer> {
     return Market.of(curve.axis(), curve.curve());
   }
 
-  private static BookEntry entry(String row, int number) {
+  private static BookEntry entry(String row, int number, CalendarRegistry calendars) {
     try {
-      return RowText.parse(row, "--row", number);
+      return RowText.parse(row, "--row", number, calendars);
     } catch (IllegalArgumentException e) {
       throw new UsageProblem("--row: " + e.getMessage());
     }

@@ -1,5 +1,6 @@
 package ebbline.data;
 
+import ebbline.time.CalendarRegistry;
 import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
 import java.util.ArrayList;
@@ -12,22 +13,26 @@ import java.util.function.Consumer;
 public final class BookFile {
   private final CsvTable table;
 
-  private BookFile(CsvTable table) {
+  private final CalendarRegistry calendars;
+
+  private BookFile(CsvTable table, CalendarRegistry calendars) {
     this.table = table;
+    this.calendars = calendars;
   }
 
   /**
    * Reads a book's settings and header.
    *
+   * @param calendars that the rows may name
    * @throws InputProblems if the file or its header cannot be used
    */
-  public static BookFile open(String path) {
+  public static BookFile open(String path, CalendarRegistry calendars) {
     CsvTable table = CsvTable.open(SourceFile.readBook(path), BookColumns.LAYOUT);
     if (!table.hasColumn("maturity")) {
       throw InputProblems.of(
           table.headerProblem("maturity", "the column is missing; every instrument needs it"));
     }
-    return new BookFile(table);
+    return new BookFile(table, calendars);
   }
 
   public SourceFile file() {
@@ -56,7 +61,7 @@ public final class BookFile {
             reader.accept(brokenRow(++count[0], broken.get(reported[0])));
           }
           count[0]++;
-          reader.accept(unique(BookRows.entry(row, count[0]), row, ids));
+          reader.accept(unique(BookRows.entry(row, count[0], calendars), row, ids));
         });
     for (; reported[0] < broken.size(); reported[0]++) {
       reader.accept(brokenRow(++count[0], broken.get(reported[0])));

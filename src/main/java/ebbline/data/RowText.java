@@ -1,5 +1,6 @@
 package ebbline.data;
 
+import ebbline.time.CalendarRegistry;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -14,10 +15,12 @@ public final class RowText {
    *
    * @param option how the message calls the place, {@code --row}
    * @param number of the row, its label where it has none
+   * @param calendars that the row may name
    * @throws IllegalArgumentException in words if the text is no list of pairs, or a key is unknown
    *     or repeated; a value that is wrong makes a bad entry instead
    */
-  public static BookEntry parse(String text, String option, int number) {
+  public static BookEntry parse(
+      String text, String option, int number, CalendarRegistry calendars) {
     Map<String, String> pairs = pairs(text);
     List<Column> columns = new ArrayList<>();
     Map<String, String> seen = new LinkedHashMap<>();
@@ -37,7 +40,8 @@ public final class RowText {
       columns.add(column);
     }
     String[] cells = pairs.values().toArray(new String[0]);
-    return BookRows.entry(new CsvRow(option, 0, columns, cells, new ArrayList<>()), number);
+    return BookRows.entry(
+        new CsvRow(option, 0, columns, cells, new ArrayList<>()), number, calendars);
   }
 
   private static Map<String, String> pairs(String text) {

@@ -7,6 +7,7 @@ import ebbline.instrument.Bond;
 import ebbline.instrument.BondOption;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.ZeroOption;
+import ebbline.time.CalendarRegistry;
 import ebbline.time.DayCount;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -23,7 +24,7 @@ class BookFileTest {
     Path file = folder.resolve("book.csv");
     Files.writeString(file, text);
     List<BookEntry> entries = new ArrayList<>();
-    BookFile.open(file.toString()).forEach(entries::add);
+    BookFile.open(file.toString(), CalendarRegistry.standard()).forEach(entries::add);
     return entries;
   }
 
@@ -128,20 +129,29 @@ class BookFileTest {
   @Test
   void aTypedRowIsReadLikeALine() {
     BookRow row =
-        good(RowText.parse("id=a maturity=5  coupon=4% x-note=\"two words\"", "--row", 1));
+        good(
+            RowText.parse(
+                "id=a maturity=5  coupon=4% x-note=\"two words\"",
+                "--row", 1, CalendarRegistry.standard()));
     assertThat(row.carried()).containsEntry("x-note", "two words");
-    assertThat(bad(RowText.parse("maturity=5 coupon=4.25", "--row", 3)))
+    assertThat(
+            bad(RowText.parse("maturity=5 coupon=4.25", "--row", 3, CalendarRegistry.standard())))
         .startsWith("--row: column 'coupon'");
-    assertThatThrownBy(() -> RowText.parse("maturity=5 maturity=6", "--row", 1))
+    assertThatThrownBy(
+            () -> RowText.parse("maturity=5 maturity=6", "--row", 1, CalendarRegistry.standard()))
         .hasMessage("the key 'maturity' is given twice");
-    assertThatThrownBy(() -> RowText.parse("coupon=4% coupon_pct=4", "--row", 1))
+    assertThatThrownBy(
+            () -> RowText.parse("coupon=4% coupon_pct=4", "--row", 1, CalendarRegistry.standard()))
         .hasMessage("the key 'coupon' is given twice");
-    assertThatThrownBy(() -> RowText.parse("cupon=4%", "--row", 1))
+    assertThatThrownBy(() -> RowText.parse("cupon=4%", "--row", 1, CalendarRegistry.standard()))
         .hasMessage("a row has no key 'cupon'; did you mean 'coupon'?");
-    assertThatThrownBy(() -> RowText.parse("id=\"open", "--row", 1))
+    assertThatThrownBy(() -> RowText.parse("id=\"open", "--row", 1, CalendarRegistry.standard()))
         .hasMessageContaining("not closed");
-    assertThatThrownBy(() -> RowText.parse("  ", "--row", 1)).hasMessageContaining("found nothing");
-    assertThatThrownBy(() -> RowText.parse("a bond", "--row", 1)).hasMessageContaining("found 'a'");
-    assertThatThrownBy(() -> RowText.parse("=5", "--row", 1)).hasMessageContaining("without a key");
+    assertThatThrownBy(() -> RowText.parse("  ", "--row", 1, CalendarRegistry.standard()))
+        .hasMessageContaining("found nothing");
+    assertThatThrownBy(() -> RowText.parse("a bond", "--row", 1, CalendarRegistry.standard()))
+        .hasMessageContaining("found 'a'");
+    assertThatThrownBy(() -> RowText.parse("=5", "--row", 1, CalendarRegistry.standard()))
+        .hasMessageContaining("without a key");
   }
 }

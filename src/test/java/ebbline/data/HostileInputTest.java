@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.fail;
 
 import ebbline.curve.DiscountCurve;
+import ebbline.time.CalendarRegistry;
 import ebbline.time.InputProblems;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -189,7 +190,7 @@ class HostileInputTest {
         },
         path -> {
           int[] rows = {0};
-          BookFile.open(path).forEach(entry -> rows[0]++);
+          BookFile.open(path, CalendarRegistry.standard()).forEach(entry -> rows[0]++);
           assertThat(rows[0]).isEqualTo(4);
         });
   }
@@ -254,7 +255,7 @@ class HostileInputTest {
   void messagesStayOnOneShortLine() throws IOException {
     Path file = folder.resolve("book.csv");
     Files.writeString(file, "maturity,coupon\n\"\u001b[2J\n" + "y".repeat(300) + "\",4%\n");
-    BookFile.open(file.toString())
+    BookFile.open(file.toString(), CalendarRegistry.standard())
         .forEach(
             entry ->
                 assertThat(((BookEntry.Bad) entry).message())

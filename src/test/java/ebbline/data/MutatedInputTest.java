@@ -2,6 +2,7 @@ package ebbline.data;
 
 import static org.assertj.core.api.Assertions.fail;
 
+import ebbline.time.CalendarRegistry;
 import ebbline.time.InputProblems;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
@@ -89,7 +90,7 @@ class MutatedInputTest {
     check(
         Files.readAllBytes(Path.of("examples", "book.csv")),
         3,
-        f -> BookFile.open(f).forEach(entry -> {}));
+        f -> BookFile.open(f, CalendarRegistry.standard()).forEach(entry -> {}));
   }
 
   @Test

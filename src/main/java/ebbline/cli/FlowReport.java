@@ -18,7 +18,7 @@ final class FlowReport {
 
   /** Adds the flows, their sum and, for a right, the value by a second method. */
   static void explain(ResultRow.Builder result, BookRow row, Market market) {
-    Claim claim = row.instrument().claim(market.axis());
+    Claim claim = market.claim(row.instrument());
     result.rows("flows", flows(row, market));
     if (!claim.rights().isEmpty() && market.rates().isPresent()) {
       Valuation second = IntegrationCheck.value(claim, market.rates().get());
@@ -38,7 +38,7 @@ final class FlowReport {
    * discounted as if they were certain.
    */
   static List<ResultRow> flows(BookRow row, Market market) {
-    Claim claim = row.instrument().claim(market.axis());
+    Claim claim = market.claim(row.instrument());
     double scale = row.face() / 100;
     List<ResultRow> rows = new ArrayList<>();
     double sum = add(rows, "flow", claim.flows(), scale, market);

@@ -44,7 +44,7 @@ final class BondRow implements RowKind {
     return cells.build(
         maturity.isPresent() && coupon.isPresent(),
         () ->
-            new Bond(
+            Bond.of(
                 maturity.get(), coupon.getAsDouble(), frequency, dayCount, redemption, settleDays));
   }
 }

@@ -26,6 +26,6 @@ final class ZeroBondRow implements RowKind {
   static Optional<ZeroBond> zeroBond(RowCells cells) {
     Optional<Moment> maturity = cells.requiredMoment("maturity");
     double redemption = cells.redemption();
-    return cells.build(maturity.isPresent(), () -> new ZeroBond(maturity.get(), redemption));
+    return cells.build(maturity.isPresent(), () -> ZeroBond.of(maturity.get(), redemption));
   }
 }

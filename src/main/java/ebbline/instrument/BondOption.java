@@ -12,7 +12,7 @@ import java.util.Objects;
  * @param strikeKind whether accrued interest is added to the strike
  */
 public record BondOption(
-    OptionKind option, Moment expiry, Bond underlying, double strike, StrikeKind strikeKind)
+    OptionKind option, Moment expiry, CouponBond underlying, double strike, StrikeKind strikeKind)
     implements Instrument {
 
   /** What is paid on exercise. */
@@ -50,8 +50,9 @@ public record BondOption(
   @Override
   public Claim claim(TimeAxis axis) {
     double exercise = OptionClaim.exercise(expiry, axis);
-    CashFlows flows = underlying.flowsAfter(exercise, axis);
-    double accrued = strikeKind == StrikeKind.CLEAN ? underlying.accrued(exercise, axis) : 0;
+    PlacedLeg bond = underlying.leg().on(axis);
+    CashFlows flows = bond.flowsAfter(exercise);
+    double accrued = strikeKind == StrikeKind.CLEAN ? bond.accrued(exercise) : 0;
     return OptionClaim.of(option, exercise, flows, strike + accrued);
   }
 }

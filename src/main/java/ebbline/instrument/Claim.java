@@ -9,14 +9,21 @@ import java.util.Objects;
  *
  * @param flows what is paid to the holder if nobody exercises; after settlement only
  * @param rights in the order of their decisions; at most one party's each date
+ * @param floating interest that is not fixed yet, in the order of payment
  * @param settlement when the buyer pays, years from today; 0 where it settles today
  * @param accrued accrued interest at settlement, per 100 face; negative ex-dividend
  */
-public record Claim(CashFlows flows, List<Right> rights, double settlement, double accrued) {
+public record Claim(
+    CashFlows flows,
+    List<Right> rights,
+    List<FloatingCoupon> floating,
+    double settlement,
+    double accrued) {
 
   public Claim {
     Objects.requireNonNull(flows, "flows");
     rights = List.copyOf(rights);
+    floating = List.copyOf(floating);
     if (!(settlement >= 0 && Double.isFinite(settlement) && Double.isFinite(accrued))) {
       throw new IllegalArgumentException(
           "settlement must not be before today, found " + settlement + ", accrued " + accrued);
@@ -26,6 +33,11 @@ public record Claim(CashFlows flows, List<Right> rights, double settlement, doub
         throw new IllegalArgumentException("rights must be in the order of their decisions");
       }
     }
+  }
+
+  /** Fixed flows and rights alone. */
+  public Claim(CashFlows flows, List<Right> rights, double settlement, double accrued) {
+    this(flows, rights, List.of(), settlement, accrued);
   }
 
   /** Flows without rights, settled today without accrued interest. */

@@ -3,7 +3,7 @@ package ebbline.instrument;
 import ebbline.time.TimeAxis;
 
 /** What is owed, when, and who may choose: terms without prices. */
-public sealed interface Instrument permits Bond, ZeroBond, ZeroOption, BondOption {
+public sealed interface Instrument permits CouponBond, FloatingNote, Swap, ZeroOption, BondOption {
 
   /** The name of the kind as books write it. */
   String kind();

@@ -1,19 +1,28 @@
 package ebbline.instrument;
 
+import ebbline.time.DayCount;
 import ebbline.time.Moment;
-import ebbline.time.TimeAxis;
 import java.util.Objects;
 
-/**
- * One payment of the redemption at maturity.
- *
- * @param redemption per 100 face; above 0
- */
-public record ZeroBond(Moment maturity, double redemption) implements Instrument {
+/** One payment of the redemption at maturity. */
+public record ZeroBond(BondTerms terms) implements CouponBond {
 
   public ZeroBond {
-    Objects.requireNonNull(maturity, "maturity");
-    Terms.requireRedemption(redemption);
+    Objects.requireNonNull(terms, "terms");
+  }
+
+  /**
+   * A zero bond settled today.
+   *
+   * @param redemption per 100 face; above 0
+   */
+  public static ZeroBond of(Moment maturity, double redemption) {
+    return new ZeroBond(
+        BondTerms.of(maturity, 2, DayCount.ACT_ACT_ICMA).withRedemption(redemption));
+  }
+
+  public Moment maturity() {
+    return terms.maturity();
   }
 
   @Override
@@ -22,9 +31,7 @@ public record ZeroBond(Moment maturity, double redemption) implements Instrument
   }
 
   @Override
-  public Claim claim(TimeAxis axis) {
-    double time = axis.years(maturity);
-    Terms.requireAfter("maturity", maturity, time, 0, "today");
-    return Claim.of(CashFlows.single(time, redemption));
+  public FixedLeg leg() {
+    return FixedLeg.of(terms, 0);
   }
 }

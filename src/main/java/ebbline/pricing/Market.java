@@ -1,6 +1,8 @@
 package ebbline.pricing;
 
 import ebbline.curve.DiscountCurve;
+import ebbline.instrument.Claim;
+import ebbline.instrument.Instrument;
 import ebbline.model.GaussianRates;
 import ebbline.time.TimeAxis;
 import java.util.Objects;
@@ -12,20 +14,36 @@ import java.util.Optional;
  * @param axis today, and how years are counted
  * @param curve discount factors
  * @param rates the short-rate model over the curve, where there is one
+ * @param projection the curve of floating rates, where it is not the one that discounts
  */
-public record Market(TimeAxis axis, DiscountCurve curve, Optional<GaussianRates> rates) {
+public record Market(
+    TimeAxis axis,
+    DiscountCurve curve,
+    Optional<GaussianRates> rates,
+    Optional<DiscountCurve> projection) {
 
   public Market {
     Objects.requireNonNull(axis, "axis");
     Objects.requireNonNull(curve, "curve");
     Objects.requireNonNull(rates, "rates");
+    Objects.requireNonNull(projection, "projection");
+  }
+
+  /** The same market with floating rates from a curve of their own. */
+  public Market withProjection(DiscountCurve forwards) {
+    return new Market(axis, curve, rates, Optional.of(forwards));
+  }
+
+  /** The instrument's terms here, floating rates at their forwards. */
+  public Claim claim(Instrument instrument) {
+    return Projection.fixed(instrument.claim(axis), projection.orElse(curve));
   }
 
   public static Market of(TimeAxis axis, DiscountCurve curve) {
-    return new Market(axis, curve, Optional.empty());
+    return new Market(axis, curve, Optional.empty(), Optional.empty());
   }
 
   public static Market of(TimeAxis axis, GaussianRates rates) {
-    return new Market(axis, rates.curve(), Optional.of(rates));
+    return new Market(axis, rates.curve(), Optional.of(rates), Optional.empty());
   }
 }

@@ -2,9 +2,10 @@ package ebbline.pricing;
 
 import ebbline.bond.StreetYield;
 import ebbline.bond.ZSpread;
-import ebbline.instrument.Bond;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Claim;
+import ebbline.instrument.CouponBond;
+import ebbline.instrument.ZeroBond;
 import java.util.EnumMap;
 import java.util.Optional;
 
@@ -31,7 +32,7 @@ public final class RowPricer {
   }
 
   private PricedRow priced(BookRow row) {
-    Claim claim = row.instrument().claim(market.axis());
+    Claim claim = market.claim(row.instrument());
     Valuation value = value(claim);
     EnumMap<PriceFigure, Double> figures = new EnumMap<>(PriceFigure.class);
     double scale = row.face() / 100;
@@ -42,7 +43,7 @@ public final class RowPricer {
       figures.put(PriceFigure.DIRTY_PRICE, dirty);
       figures.put(PriceFigure.CLEAN_PRICE, dirty - claim.accrued());
       figures.put(PriceFigure.ACCRUED, claim.accrued());
-      if (row.instrument() instanceof Bond bond) {
+      if (row.instrument() instanceof CouponBond bond && !(bond instanceof ZeroBond)) {
         bondFigures(bond, dirty, row, claim, figures);
       }
     }
@@ -72,8 +73,12 @@ public final class RowPricer {
   }
 
   private void bondFigures(
-      Bond bond, double dirty, BookRow row, Claim claim, EnumMap<PriceFigure, Double> figures) {
-    StreetYield street = new StreetYield(bond.periodFlows(market.axis()));
+      CouponBond bond,
+      double dirty,
+      BookRow row,
+      Claim claim,
+      EnumMap<PriceFigure, Double> figures) {
+    StreetYield street = new StreetYield(bond.leg().on(market.axis()).periodFlows());
     double yield = street.yieldOf(dirty);
     figures.put(PriceFigure.YIELD, yield);
     figures.put(PriceFigure.MACAULAY_DURATION, street.macaulayDuration(yield));

@@ -17,14 +17,13 @@ import org.junit.jupiter.api.Test;
 class StreetYieldTest {
 
   private static StreetYield street(String settle, String maturity, double coupon, int frequency) {
-    Bond bond = new Bond(Moment.parse(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
-    return new StreetYield(bond.periodFlows(TimeAxis.from(LocalDate.parse(settle))));
+    Bond bond = Bond.of(Moment.parse(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
+    return new StreetYield(bond.leg().on(TimeAxis.from(LocalDate.parse(settle))).periodFlows());
   }
 
   private static StreetYield timed(double maturity, double coupon, int frequency) {
-    Bond bond =
-        new Bond(Moment.ofYears(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
-    return new StreetYield(bond.periodFlows(TimeAxis.undated()));
+    Bond bond = Bond.of(Moment.ofYears(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
+    return new StreetYield(bond.leg().on(TimeAxis.undated()).periodFlows());
   }
 
   /** ISO/IEC 29500-1 sec. 18.17.7, worked examples of DURATION and MDURATION, basis 1. */

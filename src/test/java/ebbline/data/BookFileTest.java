@@ -42,11 +42,11 @@ class BookFileTest {
     assertThat(row.id()).isEqualTo("1");
     assertThat(row.face()).isEqualTo(100);
     Bond bond = (Bond) row.instrument();
-    assertThat(bond.coupon()).isEqualTo(0.04);
-    assertThat(bond.frequency()).isEqualTo(2);
-    assertThat(bond.dayCount()).isEqualTo(DayCount.ACT_ACT_ICMA);
-    assertThat(bond.redemption()).isEqualTo(100);
-    assertThat(bond.settleDays()).isZero();
+    assertThat(bond.leg().coupon()).isEqualTo(0.04);
+    assertThat(bond.leg().terms().frequency()).isEqualTo(2);
+    assertThat(bond.leg().terms().conventions().dayCount()).isEqualTo(DayCount.ACT_ACT_ICMA);
+    assertThat(bond.leg().terms().redemption()).isEqualTo(100);
+    assertThat(bond.leg().terms().settleDays()).isZero();
     assertThat(row.price()).isEmpty();
   }
 

@@ -14,11 +14,11 @@ class BondTest {
   private static final TimeAxis TODAY = TimeAxis.from(LocalDate.of(2026, 11, 30));
 
   private static Bond bond(String maturity, double coupon, int frequency) {
-    return new Bond(Moment.parse(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
+    return Bond.of(Moment.parse(maturity), coupon, frequency, DayCount.ACT_ACT_ICMA, 100, 0);
   }
 
   private static Bond actual365(String maturity, double coupon, int frequency) {
-    return new Bond(Moment.parse(maturity), coupon, frequency, DayCount.ACT_365F, 100, 0);
+    return Bond.of(Moment.parse(maturity), coupon, frequency, DayCount.ACT_365F, 100, 0);
   }
 
   @Test
@@ -77,7 +77,7 @@ class BondTest {
   void settlementIsCountedInBusinessDays() {
     // 2026-11-27 is a Friday
     TimeAxis friday = TimeAxis.from(LocalDate.of(2026, 11, 27));
-    Bond bond = new Bond(Moment.parse("2028-12-01"), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 2);
+    Bond bond = Bond.of(Moment.parse("2028-12-01"), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 2);
     Claim claim = bond.claim(friday);
     assertThat(claim.settlement()).isEqualTo(friday.years(LocalDate.of(2026, 12, 1)));
     assertThat(claim.accrued()).isZero(); // the coupon of settlement day is the seller's
@@ -94,7 +94,7 @@ class BondTest {
 
   @Test
   void theZeroOptionReceivesTheBondLessTheStrike() {
-    ZeroBond zero = new ZeroBond(Moment.parse("3"), 100);
+    ZeroBond zero = ZeroBond.of(Moment.parse("3"), 100);
     Claim call =
         new ZeroOption(OptionKind.CALL, Moment.parse("1"), zero, 87).claim(TimeAxis.undated());
     assertThat(call.flows().isEmpty()).isTrue();
@@ -144,11 +144,11 @@ class BondTest {
     assertThatThrownBy(() -> bond("300", 0.04, 2).claim(TimeAxis.undated()))
         .hasMessageContaining("within 200 years");
     assertThatThrownBy(() -> bond("3", Double.NaN, 2)).hasMessageContaining("NaN");
-    assertThatThrownBy(() -> new ZeroBond(Moment.parse("3"), 0))
+    assertThatThrownBy(() -> ZeroBond.of(Moment.parse("3"), 0))
         .hasMessage("redemption must be above 0, found 0.0");
-    assertThatThrownBy(() -> new ZeroBond(Moment.parse("-1"), 100).claim(TimeAxis.undated()))
+    assertThatThrownBy(() -> ZeroBond.of(Moment.parse("-1"), 100).claim(TimeAxis.undated()))
         .hasMessageContaining("maturity must lie after today");
-    ZeroBond zero = new ZeroBond(Moment.parse("3"), 100);
+    ZeroBond zero = ZeroBond.of(Moment.parse("3"), 100);
     assertThatThrownBy(
             () ->
                 new ZeroOption(OptionKind.CALL, Moment.parse("3"), zero, 90)
@@ -191,7 +191,7 @@ class BondTest {
           // 29 February 2024 is a Thursday, 31 August a Saturday: 132 weekdays, 22 of them gone.
           new Expected(DayCount.BUS_252, 132 / 252.0, 22 / 252.0)
         }) {
-      Bond bond = new Bond(Moment.parse("2024-08-31"), 0.06, 2, e.count(), 100, 0);
+      Bond bond = Bond.of(Moment.parse("2024-08-31"), 0.06, 2, e.count(), 100, 0);
       Claim claim = bond.claim(axis);
       assertThat(claim.flows().amounts())
           .as(e.count().label())

@@ -23,7 +23,7 @@ import org.junit.jupiter.api.Test;
 class RowPricerTest {
   private static final Market FLAT = Market.of(TimeAxis.undated(), FlatCurve.of(0.05));
   private static final Bond BOND =
-      new Bond(Moment.ofYears(2.25), 0.06, 2, DayCount.ACT_ACT_ICMA, 100, 0);
+      Bond.of(Moment.ofYears(2.25), 0.06, 2, DayCount.ACT_ACT_ICMA, 100, 0);
 
   private static BookRow row(Instrument instrument, double face) {
     return new BookRow(
@@ -54,7 +54,7 @@ class RowPricerTest {
   @Test
   void theDirtyPriceIsCarriedToSettlement() {
     TimeAxis axis = TimeAxis.from(LocalDate.of(2026, 11, 27));
-    Bond bond = new Bond(Moment.parse("2028-12-01"), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 2);
+    Bond bond = Bond.of(Moment.parse("2028-12-01"), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 2);
     PricedRow priced =
         new RowPricer(Market.of(axis, FlatCurve.of(0.05)), Optional.empty()).price(row(bond, 100));
     double settlement = 4 / 365.0;
@@ -104,8 +104,7 @@ class RowPricerTest {
   @Test
   void anOptionNeedsAModelAndSaysSo() {
     ZeroOption option =
-        new ZeroOption(
-            OptionKind.CALL, Moment.ofYears(1), new ZeroBond(Moment.ofYears(3), 100), 87);
+        new ZeroOption(OptionKind.CALL, Moment.ofYears(1), ZeroBond.of(Moment.ofYears(3), 100), 87);
     PricedRow failed = new RowPricer(FLAT, Optional.empty()).price(row(option, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).contains("needs a model");
@@ -127,7 +126,7 @@ class RowPricerTest {
 
   @Test
   void aBondPastItsMaturityFailsInItsRow() {
-    Bond old = new Bond(Moment.ofYears(-1), 0.06, 2, DayCount.ACT_ACT_ICMA, 100, 0);
+    Bond old = Bond.of(Moment.ofYears(-1), 0.06, 2, DayCount.ACT_ACT_ICMA, 100, 0);
     PricedRow failed = new RowPricer(FLAT, Optional.empty()).price(row(old, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).isEqualTo("maturity must lie after today, found -1.0");

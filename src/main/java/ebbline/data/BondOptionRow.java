@@ -21,7 +21,8 @@ final class BondOptionRow implements RowKind {
   @Override
   public Set<String> columns() {
     Set<String> columns = new TreeSet<>(new BondRow().columns());
-    columns.removeAll(List.of("price", "yield", "yield_kind", "settle_days"));
+    columns.removeAll(TermsCells.QUOTE);
+    columns.remove("settle_days");
     columns.addAll(List.of("expiry", "kind", "strike", "strike_kind"));
     return columns;
   }

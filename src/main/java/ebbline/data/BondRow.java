@@ -1,11 +1,13 @@
 package ebbline.data;
 
 import ebbline.instrument.Bond;
+import ebbline.instrument.BondTerms;
 import ebbline.time.DayCount;
-import ebbline.time.Moment;
+import ebbline.time.ScheduleTerms.AccrualDates;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.TreeSet;
 
 /** Rows of bonds with a fixed coupon. */
 final class BondRow implements RowKind {
@@ -17,16 +19,16 @@ final class BondRow implements RowKind {
 
   @Override
   public Set<String> columns() {
-    return Set.of(
-        "maturity",
-        "coupon",
-        "frequency",
-        "day_count",
-        "redemption",
-        "settle_days",
-        "price",
-        "yield",
-        "yield_kind");
+    return couponColumns();
+  }
+
+  /** The columns of every kind with fixed coupons. */
+  static Set<String> couponColumns() {
+    Set<String> columns = new TreeSet<>(TermsCells.SCHEDULE);
+    columns.addAll(TermsCells.SETTLING);
+    columns.addAll(TermsCells.QUOTE);
+    columns.add("coupon");
+    return columns;
   }
 
   @Override
@@ -34,17 +36,14 @@ final class BondRow implements RowKind {
     return bond(cells);
   }
 
+  static Optional<BondTerms> terms(RowCells cells) {
+    return TermsCells.read(cells, 2, DayCount.ACT_ACT_ICMA, AccrualDates.UNADJUSTED, "issue");
+  }
+
   static Optional<Bond> bond(RowCells cells) {
-    Optional<Moment> maturity = cells.requiredMoment("maturity");
+    Optional<BondTerms> terms = terms(cells);
     OptionalDouble coupon = cells.requiredRate("coupon");
-    int frequency = cells.frequency(2);
-    DayCount dayCount = cells.dayCount(DayCount.ACT_ACT_ICMA);
-    double redemption = cells.redemption();
-    int settleDays = cells.settleDays();
     return cells.build(
-        maturity.isPresent() && coupon.isPresent(),
-        () ->
-            Bond.of(
-                maturity.get(), coupon.getAsDouble(), frequency, dayCount, redemption, settleDays));
+        terms.isPresent() && coupon.isPresent(), () -> Bond.of(terms.get(), coupon.getAsDouble()));
   }
 }

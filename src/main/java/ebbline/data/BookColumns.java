@@ -12,7 +12,16 @@ final class BookColumns {
 
   /** Kinds that this version prices: a new kind of instrument is one more line here. */
   private static final List<RowKind> ALL =
-      List.of(new BondRow(), new ZeroBondRow(), new ZeroOptionRow(), new BondOptionRow());
+      List.of(
+          new BondRow(),
+          new ZeroBondRow(),
+          new BillRow(),
+          new FloatingNoteRow(),
+          new StepBondRow(),
+          new AmortisingBondRow(),
+          new SwapRow(),
+          new ZeroOptionRow(),
+          new BondOptionRow());
 
   static final Map<String, RowKind> KINDS =
       ALL.stream().collect(Collectors.toUnmodifiableMap(RowKind::name, kind -> kind));
@@ -20,17 +29,12 @@ final class BookColumns {
   /** Kinds of the book format that this version reads and does not price. */
   static final Set<String> LATER =
       Set.of(
-          "bill",
-          "floating-note",
-          "amortising-bond",
-          "step-bond",
           "callable-bond",
           "putable-bond",
           "caplet",
           "floorlet",
           "cap",
           "floor",
-          "swap",
           "swaption",
           "bermudan-swaption");
 
@@ -56,6 +60,8 @@ final class BookColumns {
               "ex_days",
               "price",
               "yield_kind",
+              "last_period",
+              "rounding",
               "calls",
               "puts",
               "notice",
@@ -69,7 +75,7 @@ final class BookColumns {
               "rate_basis",
               "sinking",
               "steps"),
-          Set.of("coupon", "yield"));
+          Set.of("coupon", "yield", "spread", "fixing"));
 
   private BookColumns() {}
 

@@ -2,6 +2,10 @@ package ebbline.data;
 
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Instrument;
+import ebbline.instrument.LastPeriodRule;
+import ebbline.instrument.PriceRounding;
+import ebbline.instrument.QuoteTerms;
+import ebbline.instrument.YieldKind;
 import ebbline.time.CalendarRegistry;
 import ebbline.time.InputProblem;
 import java.util.ArrayList;
@@ -101,18 +105,15 @@ final class BookRows {
     if (row.has("price") && row.has("yield")) {
       row.problem("yield", row.text("yield").orElseThrow(), "give price or yield, not both");
     }
-    row.value("yield_kind", BookRows::street);
+    QuoteTerms quote =
+        new QuoteTerms(
+            row.value("yield_kind", YieldKind::of).orElse(YieldKind.STREET),
+            row.value("last_period", LastPeriodRule::of).orElse(LastPeriodRule.SIMPLE),
+            row.value("rounding", PriceRounding::of).orElse(PriceRounding.NONE));
     Optional<? extends Instrument> instrument =
         BookColumns.KINDS.get(kind).read(new RowCells(row, calendars));
     return row.problems().isEmpty()
-        ? instrument.map(i -> new BookRow(id, i, face, price, yield, carried))
+        ? instrument.map(i -> new BookRow(id, i, face, price, yield, quote, carried))
         : Optional.empty();
-  }
-
-  private static String street(String text) {
-    if (text.equals("street")) {
-      return text;
-    }
-    throw new IllegalArgumentException("expected street, the kind that this version has");
   }
 }

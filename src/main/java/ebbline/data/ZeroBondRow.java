@@ -1,9 +1,11 @@
 package ebbline.data;
 
+import ebbline.instrument.BondTerms;
 import ebbline.instrument.ZeroBond;
-import ebbline.time.Moment;
+import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeSet;
 
 /** Rows of zero bonds. */
 final class ZeroBondRow implements RowKind {
@@ -15,7 +17,9 @@ final class ZeroBondRow implements RowKind {
 
   @Override
   public Set<String> columns() {
-    return Set.of("maturity", "redemption");
+    Set<String> columns = new TreeSet<>(BondRow.couponColumns());
+    columns.removeAll(List.of("coupon", "first_coupon", "last_coupon", "ex_days"));
+    return columns;
   }
 
   @Override
@@ -24,8 +28,7 @@ final class ZeroBondRow implements RowKind {
   }
 
   static Optional<ZeroBond> zeroBond(RowCells cells) {
-    Optional<Moment> maturity = cells.requiredMoment("maturity");
-    double redemption = cells.redemption();
-    return cells.build(maturity.isPresent(), () -> ZeroBond.of(maturity.get(), redemption));
+    Optional<BondTerms> terms = BondRow.terms(cells);
+    return cells.build(terms.isPresent(), () -> new ZeroBond(terms.get()));
   }
 }

@@ -4,9 +4,11 @@ import ebbline.instrument.OptionKind;
 import ebbline.instrument.ZeroBond;
 import ebbline.instrument.ZeroOption;
 import ebbline.time.Moment;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.TreeSet;
 
 /** Rows of options on zero bonds. */
 final class ZeroOptionRow implements RowKind {
@@ -18,7 +20,11 @@ final class ZeroOptionRow implements RowKind {
 
   @Override
   public Set<String> columns() {
-    return Set.of("maturity", "redemption", "expiry", "kind", "strike");
+    Set<String> columns = new TreeSet<>(new ZeroBondRow().columns());
+    columns.removeAll(TermsCells.QUOTE);
+    columns.removeAll(List.of("settle_days", "issue"));
+    columns.addAll(List.of("expiry", "kind", "strike"));
+    return columns;
   }
 
   @Override

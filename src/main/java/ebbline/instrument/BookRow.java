@@ -13,6 +13,7 @@ import java.util.OptionalDouble;
  * @param face money; negative is short
  * @param price quoted clean price per 100, if given
  * @param yield quoted yield, a decimal, if given
+ * @param quote what yields mean
  * @param carried the book's own columns {@code x-…}, in order
  */
 public record BookRow(
@@ -21,11 +22,24 @@ public record BookRow(
     double face,
     OptionalDouble price,
     OptionalDouble yield,
+    QuoteTerms quote,
     Map<String, String> carried) {
+
+  /** A row whose yields are the street's. */
+  public BookRow(
+      String id,
+      Instrument instrument,
+      double face,
+      OptionalDouble price,
+      OptionalDouble yield,
+      Map<String, String> carried) {
+    this(id, instrument, face, price, yield, QuoteTerms.STANDARD, carried);
+  }
 
   public BookRow {
     Objects.requireNonNull(id, "id");
     Objects.requireNonNull(instrument, "instrument");
+    Objects.requireNonNull(quote, "quote");
     if (!Double.isFinite(face)) {
       throw new IllegalArgumentException("face must be finite, found " + face);
     }

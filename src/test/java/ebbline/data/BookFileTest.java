@@ -73,8 +73,8 @@ class BookFileTest {
         read("id,maturity,coupon,frequency\na,5,4.25,5\nb,5,4%,2\nc,5,4%,2,9\nb,6,4%,2\n,,4%,\n");
     assertThat(bad(entries.get(0)))
         .isEqualTo(
-            "F:2: column 'coupon': found '4.25': 4.25 means 425 %; write 4.25% or 0.0425; F:2:"
-                + " column 'frequency': found '5': expected 1, 2, 4 or 12 payments a year");
+            "F:2: column 'frequency': found '5': expected 1, 2, 4 or 12 payments a year; F:2:"
+                + " column 'coupon': found '4.25': 4.25 means 425 %; write 4.25% or 0.0425");
     assertThat(good(entries.get(1)).id()).isEqualTo("b");
     assertThat(bad(entries.get(2)))
         .isEqualTo("F:4: the row has 5 cells, the header has 4; give every row as many");
@@ -90,7 +90,7 @@ class BookFileTest {
             "instrument,maturity,coupon,strike,roll\nzero-bond,5,4%,,none\nbond,5,4%,90,following\n");
     assertThat(bad(entries.get(0)))
         .contains("column 'coupon': found '4%': a zero-bond has no such column");
-    assertThat(bad(entries.get(1))).contains("'strike'").contains("'roll'");
+    assertThat(bad(entries.get(1))).contains("'strike'").doesNotContain("'roll'");
   }
 
   @Test

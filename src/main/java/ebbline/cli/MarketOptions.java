@@ -7,6 +7,8 @@ import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
 import ebbline.time.Moment;
 import java.time.LocalDate;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 import picocli.CommandLine.Option;
@@ -44,6 +46,15 @@ final class MarketOptions {
         });
   }
 
+  /** Options given that mean nothing without a curve. */
+  List<String> needingCurve() {
+    List<String> given = new ArrayList<>();
+    if (interpolation != null) {
+      given.add("--interpolation");
+    }
+    return given;
+  }
+
   boolean hasCurve() {
     return curve != null;
   }
@@ -64,12 +75,17 @@ final class MarketOptions {
       throw UsageProblem.of(
           "--interpolation", interpolation, "a flat curve has no nodes to interpolate");
     }
+    return read("--curve", curve, named);
+  }
+
+  /** A curve named by an option, for the as-of date of the command line. */
+  CurveInput read(String option, String text, Optional<Interpolation> named) {
     try {
-      return CurveFile.read(curve, asOf(), named);
+      return CurveFile.read(text, asOf(), named);
     } catch (InputProblems e) {
-      if (curve.startsWith("flat:")) {
+      if (text.startsWith("flat:")) {
         InputProblem problem = e.problems().get(0);
-        throw UsageProblem.of("--curve " + curve, problem.value(), problem.expected());
+        throw UsageProblem.of(option + " " + text, problem.value(), problem.expected());
       }
       throw e;
     }

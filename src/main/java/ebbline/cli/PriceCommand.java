@@ -7,14 +7,17 @@ import ebbline.data.ModelInput;
 import ebbline.data.RowText;
 import ebbline.data.SourceFile;
 import ebbline.instrument.BookRow;
+import ebbline.pricing.BookPricer;
 import ebbline.pricing.Market;
 import ebbline.pricing.Method;
 import ebbline.pricing.PricedRow;
+import ebbline.pricing.QuotedRows;
 import ebbline.pricing.RowPricer;
 import ebbline.report.OutputFormat;
 import ebbline.report.PriceReport;
 import ebbline.report.ResultRow;
 import ebbline.time.CalendarRegistry;
+import ebbline.time.TimeAxis;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -49,6 +52,7 @@ import picocli.CommandLine.Option;
     })
 final class PriceCommand implements Callable<Integer> {
   @Mixin private MarketOptions market;
+  @Mixin private ProjectionOption projection;
   @Mixin private ModelOptions model;
 
   @Option(names = "--book", paramLabel = "FILE", description = "the book, one instrument a row")
@@ -90,9 +94,11 @@ final class PriceCommand implements Callable<Integer> {
     Optional<BookFile> file = Optional.ofNullable(book).map(path -> BookFile.open(path, calendars));
     Optional<Method> wanted = method();
     List<Optional<SourceFile>> files = new ArrayList<>();
-    Market priced = market(files);
+    Optional<Market> priced = market(files);
     file.ifPresent(f -> files.add(Optional.of(f.file())));
-    RowPricer pricer = new RowPricer(priced, wanted);
+    TimeAxis axis = priced.map(Market::axis).orElseGet(this::quotedAxis);
+    BookPricer pricer =
+        priced.<BookPricer>map(m -> new RowPricer(m, wanted)).orElseGet(() -> new QuotedRows(axis));
     List<ResultRow> results = new ArrayList<>();
     file.ifPresent(f -> f.forEach(entry -> results.addAll(results(entry, pricer, priced))));
     int number = results.size();
@@ -105,8 +111,7 @@ final class PriceCommand implements Callable<Integer> {
     List<String> carried = file.map(BookFile::carried).orElse(List.of());
     boolean flowsOnly = explain != null && output.format() == OutputFormat.CSV;
     output.write(
-        Inputs.envelope(
-            "price", priced.axis(), files, flowsOnly ? List.of() : PriceReport.columns(carried)),
+        Inputs.envelope("price", axis, files, flowsOnly ? List.of() : PriceReport.columns(carried)),
         results);
     if (failed) {
       output.note("some rows could not be priced; their message says why");
@@ -126,18 +131,40 @@ final class PriceCommand implements Callable<Integer> {
     throw UsageProblem.of("--method", method, "expected auto or closed-form");
   }
 
-  private Market market(List<Optional<SourceFile>> files) {
+  /** What rows are priced from; empty where each has its own quote only. */
+  private Optional<Market> market(List<Optional<SourceFile>> files) {
     Optional<ModelInput> named = model.model(market);
+    Market found;
     if (named.isPresent()) {
       files.add(named.get().file());
-      return Market.of(named.get().axis(), named.get().rates());
+      found = Market.of(named.get().axis(), named.get().rates());
+    } else if (market.hasCurve()) {
+      CurveInput curve = market.curve();
+      files.add(curve.file());
+      found = Market.of(curve.axis(), curve.curve());
+    } else {
+      return Optional.empty();
     }
-    if (!market.hasCurve()) {
-      throw new UsageProblem("give --curve FILE or --model: what should the rows be priced from?");
+    Optional<CurveInput> forwards = projection.curve(market, found.axis());
+    if (forwards.isPresent()) {
+      files.add(forwards.get().file());
+      found = found.withProjection(forwards.get().curve());
     }
-    CurveInput curve = market.curve();
-    files.add(curve.file());
-    return Market.of(curve.axis(), curve.curve());
+    return Optional.of(found);
+  }
+
+  private TimeAxis quotedAxis() {
+    List<String> needing = new ArrayList<>(market.needingCurve());
+    if (projection.isGiven()) {
+      needing.add("--projection");
+    }
+    if (!needing.isEmpty()) {
+      throw new UsageProblem(needing.get(0) + " needs --curve FILE or --model to work on");
+    }
+    if (explain != null) {
+      throw new UsageProblem("--explain needs --curve FILE or --model: it shows discount factors");
+    }
+    return market.asOf().map(TimeAxis::from).orElse(TimeAxis.undated());
   }
 
   private static BookEntry entry(String row, int number, CalendarRegistry calendars) {
@@ -148,7 +175,7 @@ final class PriceCommand implements Callable<Integer> {
     }
   }
 
-  private List<ResultRow> results(BookEntry entry, RowPricer pricer, Market priced) {
+  private List<ResultRow> results(BookEntry entry, BookPricer pricer, Optional<Market> priced) {
     if (entry instanceof BookEntry.Bad bad) {
       failed = true;
       explained |= bad.id().equals(explain);
@@ -165,11 +192,13 @@ final class PriceCommand implements Callable<Integer> {
     boolean explains = row.id().equals(explain);
     explained |= explains;
     if (explain != null && output.format() == OutputFormat.CSV) {
-      return explains && !result.hasFailed() ? FlowReport.flows(row, priced) : List.of();
+      return explains && !result.hasFailed()
+          ? FlowReport.flows(row, priced.orElseThrow())
+          : List.of();
     }
     ResultRow.Builder built = PriceReport.result(result, row.carried());
     if (explains && !result.hasFailed()) {
-      FlowReport.explain(built, row, priced);
+      FlowReport.explain(built, row, priced.orElseThrow());
     }
     return List.of(built.build());
   }

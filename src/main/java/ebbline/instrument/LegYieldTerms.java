@@ -4,35 +4,55 @@ import ebbline.time.CouponPeriod;
 import ebbline.time.DayCount;
 import ebbline.time.TimeAxis;
 import java.time.LocalDate;
+import java.time.temporal.ChronoUnit;
 import java.util.List;
 
-/** How far away, in coupon periods, the payments of a leg lie. */
+/** How far away, in coupon periods and in years, the payments of a leg lie at settlement. */
 final class LegYieldTerms {
-  private LegYieldTerms() {}
+  private final PlacedLeg leg;
+  private final double settlement;
 
-  static PeriodFlows periodFlows(PlacedLeg leg, double settlement) {
-    List<Integer> left = leg.owedAfter(settlement);
-    double[] amounts = new double[left.size()];
-    for (int j = 0; j < amounts.length; j++) {
-      amounts[j] = leg.amount(left.get(j), settlement);
-    }
-    return new PeriodFlows(
-        leg.terms().frequency(), periodsTo(leg, left.get(0), settlement), amounts);
+  LegYieldTerms(PlacedLeg leg, double settlement) {
+    this.leg = leg;
+    this.settlement = settlement;
   }
 
-  /** Periods from settlement to the end of period i, odd ones as the parts they are made of. */
-  static double periodsTo(PlacedLeg leg, int i, double settlement) {
-    double sum = 0;
-    for (int k = 0; k <= i; k++) {
-      LegPeriod period = leg.periods().get(k);
+  YieldTerms terms() {
+    List<Integer> left = leg.owedAfter(settlement);
+    int n = left.size();
+    double[] amounts = new double[n];
+    double[] periods = new double[n];
+    double[] paid = new double[n];
+    double[] years = new double[n];
+    double soFar = 0;
+    int next = 0;
+    int periodsLeft = 0;
+    for (int i = 0; i < leg.periods().size(); i++) {
+      LegPeriod period = leg.periods().get(i);
       if (period.end() > settlement + TimeAxis.SAME_MOMENT) {
-        sum += parts(leg, period, settlement);
+        soFar += parts(period);
+        periodsLeft++;
+      }
+      if (next < n && left.get(next) == i) {
+        amounts[next] = leg.amount(i, settlement);
+        periods[next] = soFar;
+        paid[next] = soFar + delay(period);
+        years[next] = years(period, soFar);
+        next++;
       }
     }
-    return sum;
+    LegPeriod last = leg.periods().get(leg.periods().size() - 1);
+    return YieldTerms.builder(leg.terms().frequency(), amounts)
+        .at(periods, paid, years)
+        .periodsLeft(periodsLeft)
+        .interest(leg.accrued(settlement), leg.annualCoupon(settlement))
+        .redemption(leg.redemptionAfter(settlement))
+        .life(life(last, DayCount.ACT_365F), life(last, leg.dayCount()))
+        .build();
   }
 
-  private static double parts(PlacedLeg leg, LegPeriod period, double settlement) {
+  /** Periods from settlement or the period's start, whichever is later, to its end. */
+  private double parts(LegPeriod period) {
     if (period.start() >= settlement - TimeAxis.SAME_MOMENT && period.regular()) {
       return 1;
     }
@@ -53,27 +73,55 @@ final class LegYieldTerms {
       LocalDate first = from.isAfter(left) ? from : left;
       LocalDate end = on.end().isBefore(right) ? on.end() : right;
       if (first.isBefore(end)) {
-        sum += part(leg.dayCount(), on, left, right, first, end);
+        sum += part(on, left, right, first, end);
       }
     }
     return sum;
   }
 
   /** The part of a reference period between two dates in it. */
-  private static double part(
-      DayCount dayCount,
-      CouponPeriod on,
-      LocalDate left,
-      LocalDate right,
-      LocalDate first,
-      LocalDate end) {
+  private double part(
+      CouponPeriod on, LocalDate left, LocalDate right, LocalDate first, LocalDate end) {
     CouponPeriod whole =
         new CouponPeriod(
             left, right, right, on.frequency(), List.of(left, right), on.maturity(), on.calendar());
+    DayCount dayCount = leg.dayCount();
     long days = dayCount.periodDays(whole);
     // From the start, not to the end: the two differ where thirty-day months are counted.
     long before = dayCount.days(left, first, whole);
     long upTo = end.equals(right) ? days : dayCount.days(left, end, whole);
     return (upTo - before) / (double) days;
+  }
+
+  /** How much later than its coupon date a payment is made, in periods of actual days. */
+  private static double delay(LegPeriod period) {
+    if (period.dated().isEmpty()) {
+      return 0;
+    }
+    CouponPeriod on = period.dated().get();
+    LocalDate start = on.reference().get(on.reference().size() - 2);
+    LocalDate end = on.reference().get(on.reference().size() - 1);
+    return ChronoUnit.DAYS.between(on.end(), on.payment())
+        / (double) ChronoUnit.DAYS.between(start, end);
+  }
+
+  private double years(LegPeriod period, double periods) {
+    if (leg.dayCount() == DayCount.BUS_252 && period.dated().isPresent()) {
+      CouponPeriod on = period.dated().get();
+      return on.calendar().businessDays(leg.dateAt(settlement), on.end()) / 252.0;
+    }
+    return periods / leg.terms().frequency();
+  }
+
+  private double life(LegPeriod last, DayCount dayCount) {
+    if (last.dated().isEmpty()) {
+      return last.end() - settlement;
+    }
+    LocalDate settles = leg.dateAt(settlement);
+    LocalDate end = last.dated().get().payment();
+    if (dayCount == DayCount.BUS_252) {
+      return last.dated().get().calendar().businessDays(settles, end) / 252.0;
+    }
+    return (dayCount.needsPeriod() ? DayCount.ACT_365F : dayCount).years(settles, end);
   }
 }

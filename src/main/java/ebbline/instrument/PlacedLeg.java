@@ -7,6 +7,7 @@ import ebbline.time.TimeAxis;
 import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
 
 /**
  * A fixed leg in years from today: what it pays, and what has accrued, at any moment from today on.
@@ -189,9 +190,29 @@ public final class PlacedLeg {
     return new Claim(flowsAfter(settlement), List.of(), settlement, accrued(settlement));
   }
 
-  /** The coupon periods' terms for price and yield at settlement. */
-  public PeriodFlows periodFlows() {
-    return LegYieldTerms.periodFlows(this, settlement());
+  /** What price and yield are made of, at settlement. */
+  public YieldTerms yieldTerms() {
+    return new LegYieldTerms(this, settlement()).terms();
+  }
+
+  /** What the coupon that runs at a moment, or the first one after it, pays a year, per 100. */
+  double annualCoupon(double time) {
+    for (int i = 0; i < periods.size(); i++) {
+      if (periods.get(i).end() > time + TimeAxis.SAME_MOMENT) {
+        return rates[i] * outstanding[i];
+      }
+    }
+    return 0;
+  }
+
+  /** What maturity repays; empty where parts of the face are repaid between a moment and it. */
+  OptionalDouble redemptionAfter(double time) {
+    for (int i = 0; i < periods.size() - 1; i++) {
+      if (repaid[i] != 0 && periods.get(i).payment() > time + TimeAxis.SAME_MOMENT) {
+        return OptionalDouble.empty();
+      }
+    }
+    return OptionalDouble.of(repaid[periods.size() - 1]);
   }
 
   DayCount dayCount() {

@@ -2,6 +2,8 @@ package ebbline.pricing;
 
 /** How a value was computed; the label is what the user types and reads. */
 public enum Method {
+  /** From the row's own quote. */
+  QUOTED("quoted"),
   /** Flows times discount factors. */
   DISCOUNTING("discounting"),
   /** A formula, or a one-dimensional integral to rounding accuracy. */

@@ -1,16 +1,14 @@
 package ebbline.pricing;
 
-import ebbline.bond.StreetYield;
-import ebbline.bond.ZSpread;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Claim;
 import ebbline.instrument.CouponBond;
-import ebbline.instrument.ZeroBond;
+import ebbline.instrument.Swap;
 import java.util.EnumMap;
 import java.util.Optional;
 
 /** Prices one row of a book, or says why it cannot. */
-public final class RowPricer {
+public final class RowPricer implements BookPricer {
   private final Market market;
   private final Optional<Method> wanted;
 
@@ -22,7 +20,7 @@ public final class RowPricer {
     this.wanted = wanted;
   }
 
-  /** The row's figures; a row that makes no sense comes back failed and never throws. */
+  @Override
   public PricedRow price(BookRow row) {
     try {
       return priced(row);
@@ -38,16 +36,31 @@ public final class RowPricer {
     double scale = row.face() / 100;
     figures.put(PriceFigure.PRESENT_VALUE, value.presentValue() * scale);
     figures.put(PriceFigure.ERROR_BOUND, value.errorBound() * Math.abs(scale));
-    if (claim.rights().isEmpty()) {
-      double dirty = value.presentValue() / market.curve().discount(claim.settlement());
-      figures.put(PriceFigure.DIRTY_PRICE, dirty);
-      figures.put(PriceFigure.CLEAN_PRICE, dirty - claim.accrued());
-      figures.put(PriceFigure.ACCRUED, claim.accrued());
-      if (row.instrument() instanceof CouponBond bond && !(bond instanceof ZeroBond)) {
-        bondFigures(bond, dirty, row, claim, figures);
-      }
+    if (row.instrument() instanceof Swap) {
+      CurveSensitivity.put(row.instrument(), market, 0, figures);
+    } else if (claim.rights().isEmpty()) {
+      priceFigures(row, claim, value, figures);
     }
     return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, "");
+  }
+
+  private void priceFigures(
+      BookRow row, Claim claim, Valuation value, EnumMap<PriceFigure, Double> figures) {
+    double dirty = value.presentValue() / market.curve().discount(claim.settlement());
+    figures.put(PriceFigure.DIRTY_PRICE, dirty);
+    figures.put(PriceFigure.CLEAN_PRICE, dirty - claim.accrued());
+    figures.put(PriceFigure.ACCRUED, claim.accrued());
+    Optional<YieldFigures> yields = Optional.empty();
+    if (row.instrument() instanceof CouponBond bond) {
+      yields = Optional.of(new YieldFigures(bond.leg().on(market.axis()), row.quote()));
+      yields.get().put(dirty, figures);
+    } else {
+      CurveSensitivity.put(row.instrument(), market, dirty, figures);
+    }
+    Optional<Double> quoted = MarketFigures.dirty(row, claim, yields);
+    if (quoted.isPresent()) {
+      MarketFigures.put(row, claim, market, quoted.get(), yields, figures);
+    }
   }
 
   private Valuation value(Claim claim) {
@@ -70,34 +83,5 @@ public final class RowPricer {
               + " with --mean-reversion and --volatility");
     }
     return ClosedForm.value(claim, market.rates().get());
-  }
-
-  private void bondFigures(
-      CouponBond bond,
-      double dirty,
-      BookRow row,
-      Claim claim,
-      EnumMap<PriceFigure, Double> figures) {
-    StreetYield street = new StreetYield(bond.leg().on(market.axis()).periodFlows());
-    double yield = street.yieldOf(dirty);
-    figures.put(PriceFigure.YIELD, yield);
-    figures.put(PriceFigure.MACAULAY_DURATION, street.macaulayDuration(yield));
-    figures.put(PriceFigure.MODIFIED_DURATION, street.modifiedDuration(yield));
-    figures.put(PriceFigure.CONVEXITY, street.convexity(yield));
-    figures.put(PriceFigure.DV01, street.dv01(yield));
-    if (row.price().isEmpty() && row.yield().isEmpty()) {
-      return;
-    }
-    double quoted =
-        row.price().isPresent()
-            ? row.price().getAsDouble() + claim.accrued()
-            : street.price(row.yield().getAsDouble());
-    double clean = quoted - claim.accrued();
-    figures.put(PriceFigure.MARKET_CLEAN_PRICE, clean);
-    figures.put(PriceFigure.MARKET_YIELD, street.yieldOf(quoted));
-    figures.put(
-        PriceFigure.Z_SPREAD,
-        ZSpread.of(claim.flows(), market.curve(), claim.settlement(), quoted));
-    figures.put(PriceFigure.RICHNESS, clean - (dirty - claim.accrued()));
   }
 }

@@ -35,5 +35,9 @@ echo "== The same book under Vasicek"
 ebbline price --model "$models/vasicek.json" --book examples/book.csv
 
 echo
+echo "== Bonds, bills, notes and swaps against their quotes, with three months of carry"
+ebbline price --curve curves/saltmere.csv --book examples/bonds.csv --horizon 3M
+
+echo
 echo "== Published worked examples"
 ebbline verify --summary

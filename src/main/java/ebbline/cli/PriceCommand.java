@@ -11,12 +11,14 @@ import ebbline.pricing.BookPricer;
 import ebbline.pricing.Market;
 import ebbline.pricing.Method;
 import ebbline.pricing.PricedRow;
+import ebbline.pricing.PricingRequest;
 import ebbline.pricing.QuotedRows;
 import ebbline.pricing.RowPricer;
 import ebbline.report.OutputFormat;
 import ebbline.report.PriceReport;
 import ebbline.report.ResultRow;
 import ebbline.time.CalendarRegistry;
+import ebbline.time.Moment;
 import ebbline.time.TimeAxis;
 import java.util.ArrayList;
 import java.util.List;
@@ -79,6 +81,12 @@ final class PriceCommand implements Callable<Integer> {
       description = "show the flows of the row with this id, their discount factors and values")
   private String explain;
 
+  @Option(
+      names = "--horizon",
+      paramLabel = "MOMENT",
+      description = "adds forward price, carry and roll-down of bonds until then, 3M")
+  private String horizon;
+
   @Mixin private HolidayOptions holidays;
   @Mixin private OutputOptions output;
 
@@ -92,13 +100,15 @@ final class PriceCommand implements Callable<Integer> {
     }
     CalendarRegistry calendars = holidays.calendars();
     Optional<BookFile> file = Optional.ofNullable(book).map(path -> BookFile.open(path, calendars));
-    Optional<Method> wanted = method();
+    PricingRequest request = new PricingRequest(method(), horizon());
     List<Optional<SourceFile>> files = new ArrayList<>();
     Optional<Market> priced = market(files);
     file.ifPresent(f -> files.add(Optional.of(f.file())));
     TimeAxis axis = priced.map(Market::axis).orElseGet(this::quotedAxis);
     BookPricer pricer =
-        priced.<BookPricer>map(m -> new RowPricer(m, wanted)).orElseGet(() -> new QuotedRows(axis));
+        priced
+            .<BookPricer>map(m -> new RowPricer(m, request))
+            .orElseGet(() -> new QuotedRows(axis));
     List<ResultRow> results = new ArrayList<>();
     file.ifPresent(f -> f.forEach(entry -> results.addAll(results(entry, pricer, priced))));
     int number = results.size();
@@ -117,6 +127,10 @@ final class PriceCommand implements Callable<Integer> {
       output.note("some rows could not be priced; their message says why");
     }
     return (failed ? ExitStatus.CHECK_FAILED : ExitStatus.DONE).code();
+  }
+
+  private Optional<Moment> horizon() {
+    return MarketOptions.read("--horizon", horizon, Moment::parse);
   }
 
   private Optional<Method> method() {
@@ -157,6 +171,9 @@ final class PriceCommand implements Callable<Integer> {
     List<String> needing = new ArrayList<>(market.needingCurve());
     if (projection.isGiven()) {
       needing.add("--projection");
+    }
+    if (horizon != null) {
+      needing.add("--horizon");
     }
     if (!needing.isEmpty()) {
       throw new UsageProblem(needing.get(0) + " needs --curve FILE or --model to work on");

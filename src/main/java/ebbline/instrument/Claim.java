@@ -40,6 +40,11 @@ public record Claim(
     this(flows, rights, List.of(), settlement, accrued);
   }
 
+  /** The same terms with accrued interest as a standard rounds it. */
+  public Claim withAccrued(double rounded) {
+    return new Claim(flows, rights, floating, settlement, rounded);
+  }
+
   /** Flows without rights, settled today without accrued interest. */
   public static Claim of(CashFlows flows) {
     return new Claim(flows, List.of(), 0, 0);

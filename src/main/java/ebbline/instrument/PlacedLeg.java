@@ -184,6 +184,19 @@ public final class PlacedLeg {
         .toArray();
   }
 
+  /** When the periods after a moment pay, in years. */
+  public double[] paymentsAfter(double time) {
+    return periods.stream()
+        .mapToDouble(LegPeriod::payment)
+        .filter(payment -> payment > time + TimeAxis.SAME_MOMENT)
+        .toArray();
+  }
+
+  /** The last payment, in years. */
+  public double lastPayment() {
+    return periods.get(periods.size() - 1).payment();
+  }
+
   /** Flows after settlement, settlement and accrued interest; no rights. */
   public Claim claim() {
     double settlement = settlement();

@@ -1,12 +1,13 @@
 package ebbline.pricing;
 
 import ebbline.bond.AssetSwap;
+import ebbline.bond.PrintedPrice;
 import ebbline.bond.ZSpread;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Claim;
 import ebbline.instrument.CouponBond;
-import ebbline.instrument.LegPeriod;
 import ebbline.instrument.PlacedLeg;
+import ebbline.instrument.PriceRounding;
 import java.util.EnumMap;
 import java.util.Optional;
 
@@ -21,11 +22,19 @@ final class MarketFigures {
     } else if (row.yield().isEmpty()) {
       return Optional.empty();
     }
-    return Optional.of(
+    double exact =
         yields
             .orElseThrow(
                 () -> new IllegalArgumentException("this kind has no yield; give its price"))
-            .dirtyPrice(row.yield().getAsDouble()));
+            .dirtyPrice(row.yield().getAsDouble());
+    double clean = PrintedPrice.of(exact - claim.accrued(), row.quote().rounding());
+    return Optional.of(
+        row.quote().rounding() == PriceRounding.NONE ? exact : clean + claim.accrued());
+  }
+
+  /** The row's terms with accrued interest rounded where the row asks for it. */
+  static Claim printed(BookRow row, Claim claim) {
+    return claim.withAccrued(PrintedPrice.of(claim.accrued(), row.quote().rounding()));
   }
 
   /** Adds the figures. */
@@ -45,14 +54,17 @@ final class MarketFigures {
     figures.put(PriceFigure.RICHNESS, clean - figures.get(PriceFigure.CLEAN_PRICE));
     if (row.instrument() instanceof CouponBond bond) {
       PlacedLeg leg = bond.leg().on(market.axis());
-      double[] payments =
-          leg.periods().stream()
-              .mapToDouble(LegPeriod::payment)
-              .filter(t -> t > claim.settlement() + ebbline.time.TimeAxis.SAME_MOMENT)
-              .toArray();
+      double[] payments = leg.paymentsAfter(claim.settlement());
+      double[] faces = new double[payments.length];
+      double before = claim.settlement();
+      for (int i = 0; i < payments.length; i++) {
+        faces[i] = leg.outstanding(before);
+        before = payments[i];
+      }
       figures.put(
           PriceFigure.ASSET_SWAP_SPREAD,
-          AssetSwap.spread(claim.flows(), market.curve(), claim.settlement(), payments, quoted));
+          AssetSwap.spread(
+              claim.flows(), market.curve(), claim.settlement(), payments, faces, quoted));
     }
   }
 }

@@ -25,6 +25,8 @@ public enum PriceFigure {
   Z_SPREAD("z_spread", Unit.RATE),
   /** Par-par asset-swap spread over the curve. */
   ASSET_SWAP_SPREAD("asset_swap_spread", Unit.RATE),
+  /** Fixed rate at which a swap is worth nothing. */
+  PAR_RATE("par_rate", Unit.RATE),
   /** Spread over the model's curve at which the rights' value meets the market price. */
   OAS("oas", Unit.RATE),
   EFFECTIVE_DURATION("effective_duration", Unit.YEARS),

@@ -36,7 +36,7 @@ public final class QuotedRows implements BookPricer {
               + " needs a curve or a model to be priced from: give --curve FILE or --model");
     }
     PlacedLeg leg = bond.leg().on(axis);
-    Claim claim = leg.claim();
+    Claim claim = MarketFigures.printed(row, leg.claim());
     YieldFigures yields = new YieldFigures(leg, row.quote());
     double dirty =
         MarketFigures.dirty(row, claim, Optional.of(yields))

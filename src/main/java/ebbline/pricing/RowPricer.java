@@ -10,14 +10,13 @@ import java.util.Optional;
 /** Prices one row of a book, or says why it cannot. */
 public final class RowPricer implements BookPricer {
   private final Market market;
+  private final PricingRequest request;
   private final Optional<Method> wanted;
 
-  /**
-   * @param wanted the method to use; empty: the most accurate that applies
-   */
-  public RowPricer(Market market, Optional<Method> wanted) {
+  public RowPricer(Market market, PricingRequest request) {
     this.market = market;
-    this.wanted = wanted;
+    this.request = request;
+    this.wanted = request.method();
   }
 
   @Override
@@ -30,21 +29,23 @@ public final class RowPricer implements BookPricer {
   }
 
   private PricedRow priced(BookRow row) {
-    Claim claim = market.claim(row.instrument());
+    Claim claim = MarketFigures.printed(row, market.claim(row.instrument()));
     Valuation value = value(claim);
     EnumMap<PriceFigure, Double> figures = new EnumMap<>(PriceFigure.class);
     double scale = row.face() / 100;
     figures.put(PriceFigure.PRESENT_VALUE, value.presentValue() * scale);
     figures.put(PriceFigure.ERROR_BOUND, value.errorBound() * Math.abs(scale));
-    if (row.instrument() instanceof Swap) {
+    String message = "";
+    if (row.instrument() instanceof Swap swap) {
+      figures.put(PriceFigure.PAR_RATE, ParRate.of(swap, market));
       CurveSensitivity.put(row.instrument(), market, 0, figures);
     } else if (claim.rights().isEmpty()) {
-      priceFigures(row, claim, value, figures);
+      message = priceFigures(row, claim, value, figures);
     }
-    return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, "");
+    return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, message);
   }
 
-  private void priceFigures(
+  private String priceFigures(
       BookRow row, Claim claim, Valuation value, EnumMap<PriceFigure, Double> figures) {
     double dirty = value.presentValue() / market.curve().discount(claim.settlement());
     figures.put(PriceFigure.DIRTY_PRICE, dirty);
@@ -61,6 +62,12 @@ public final class RowPricer implements BookPricer {
     if (quoted.isPresent()) {
       MarketFigures.put(row, claim, market, quoted.get(), yields, figures);
     }
+    if (request.horizon().isEmpty() || !(row.instrument() instanceof CouponBond bond)) {
+      return "";
+    }
+    double spread = figures.getOrDefault(PriceFigure.Z_SPREAD, 0.0);
+    return new HorizonFigures(market, request.horizon().get())
+        .put(bond.leg().on(market.axis()), claim, quoted.orElse(dirty), spread, figures);
   }
 
   private Valuation value(Claim claim) {

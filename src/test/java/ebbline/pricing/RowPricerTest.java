@@ -36,7 +36,7 @@ class RowPricerTest {
 
   @Test
   void aBondIsTheSumOfItsDiscountedFlows() {
-    PricedRow priced = new RowPricer(FLAT, Optional.empty()).price(row(BOND, -2000));
+    PricedRow priced = new RowPricer(FLAT, PricingRequest.STANDARD).price(row(BOND, -2000));
     double sum = 0;
     for (int k = 0; k < 5; k++) {
       double t = 0.25 + 0.5 * k;
@@ -56,7 +56,8 @@ class RowPricerTest {
     TimeAxis axis = TimeAxis.from(LocalDate.of(2026, 11, 27));
     Bond bond = Bond.of(Moment.parse("2028-12-01"), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 2);
     PricedRow priced =
-        new RowPricer(Market.of(axis, FlatCurve.of(0.05)), Optional.empty()).price(row(bond, 100));
+        new RowPricer(Market.of(axis, FlatCurve.of(0.05)), PricingRequest.STANDARD)
+            .price(row(bond, 100));
     double settlement = 4 / 365.0;
     assertThat(figure(priced, PriceFigure.DIRTY_PRICE))
         .isCloseTo(
@@ -67,7 +68,7 @@ class RowPricerTest {
   void aQuotedPriceGivesMarketFiguresBesideTheCurves() {
     BookRow quoted =
         new BookRow("a", BOND, 100, OptionalDouble.of(101), OptionalDouble.empty(), Map.of());
-    PricedRow priced = new RowPricer(FLAT, Optional.empty()).price(quoted);
+    PricedRow priced = new RowPricer(FLAT, PricingRequest.STANDARD).price(quoted);
     assertThat(figure(priced, PriceFigure.MARKET_CLEAN_PRICE)).isCloseTo(101, within(1e-13));
     assertThat(figure(priced, PriceFigure.RICHNESS))
         .isCloseTo(101 - figure(priced, PriceFigure.CLEAN_PRICE), within(1e-12));
@@ -79,7 +80,7 @@ class RowPricerTest {
             OptionalDouble.empty(),
             OptionalDouble.of(figure(priced, PriceFigure.MARKET_YIELD)),
             Map.of());
-    PricedRow again = new RowPricer(FLAT, Optional.empty()).price(byYield);
+    PricedRow again = new RowPricer(FLAT, PricingRequest.STANDARD).price(byYield);
     assertThat(figure(again, PriceFigure.MARKET_CLEAN_PRICE)).isCloseTo(101, within(1e-10));
     assertThat(figure(again, PriceFigure.Z_SPREAD))
         .isCloseTo(figure(priced, PriceFigure.Z_SPREAD), within(1e-12));
@@ -87,7 +88,7 @@ class RowPricerTest {
 
   @Test
   void theSpreadOfTheCurvesOwnPriceIsZero() {
-    PricedRow fair = new RowPricer(FLAT, Optional.empty()).price(row(BOND, 100));
+    PricedRow fair = new RowPricer(FLAT, PricingRequest.STANDARD).price(row(BOND, 100));
     BookRow quoted =
         new BookRow(
             "a",
@@ -96,7 +97,7 @@ class RowPricerTest {
             OptionalDouble.of(figure(fair, PriceFigure.CLEAN_PRICE)),
             OptionalDouble.empty(),
             Map.of());
-    PricedRow priced = new RowPricer(FLAT, Optional.empty()).price(quoted);
+    PricedRow priced = new RowPricer(FLAT, PricingRequest.STANDARD).price(quoted);
     assertThat(figure(priced, PriceFigure.Z_SPREAD)).isCloseTo(0, within(1e-14));
     assertThat(figure(priced, PriceFigure.RICHNESS)).isCloseTo(0, within(1e-12));
   }
@@ -105,12 +106,12 @@ class RowPricerTest {
   void anOptionNeedsAModelAndSaysSo() {
     ZeroOption option =
         new ZeroOption(OptionKind.CALL, Moment.ofYears(1), ZeroBond.of(Moment.ofYears(3), 100), 87);
-    PricedRow failed = new RowPricer(FLAT, Optional.empty()).price(row(option, 100));
+    PricedRow failed = new RowPricer(FLAT, PricingRequest.STANDARD).price(row(option, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).contains("needs a model");
     assertThat(failed.method()).isEmpty();
     Market vasicek = Market.of(TimeAxis.undated(), new Vasicek(0.05, 0.08, 0.1, 0.015).rates());
-    PricedRow priced = new RowPricer(vasicek, Optional.empty()).price(row(option, 1000));
+    PricedRow priced = new RowPricer(vasicek, PricingRequest.STANDARD).price(row(option, 1000));
     // Hull, Options, Futures, and Other Derivatives, 11th ed., Problem 32.3: 2.59 per 100
     assertThat(figure(priced, PriceFigure.PRESENT_VALUE)).isCloseTo(25.92983062, within(1e-8));
     assertThat(priced.figure(PriceFigure.CLEAN_PRICE)).isEmpty();
@@ -119,7 +120,9 @@ class RowPricerTest {
 
   @Test
   void aMethodThatDoesNotApplyIsRefusedInTheRow() {
-    PricedRow failed = new RowPricer(FLAT, Optional.of(Method.TRINOMIAL)).price(row(BOND, 100));
+    PricedRow failed =
+        new RowPricer(FLAT, new PricingRequest(Optional.of(Method.TRINOMIAL), Optional.empty()))
+            .price(row(BOND, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).contains("without rights");
   }
@@ -127,7 +130,7 @@ class RowPricerTest {
   @Test
   void aBondPastItsMaturityFailsInItsRow() {
     Bond old = Bond.of(Moment.ofYears(-1), 0.06, 2, DayCount.ACT_ACT_ICMA, 100, 0);
-    PricedRow failed = new RowPricer(FLAT, Optional.empty()).price(row(old, 100));
+    PricedRow failed = new RowPricer(FLAT, PricingRequest.STANDARD).price(row(old, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).isEqualTo("maturity must lie after today, found -1.0");
   }

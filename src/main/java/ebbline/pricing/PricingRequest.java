@@ -1,0 +1,22 @@
+package ebbline.pricing;
+
+import ebbline.time.Moment;
+import java.util.Objects;
+import java.util.Optional;
+
+/**
+ * What the user asks of a pricing run.
+ *
+ * @param method to price by; empty for the most accurate that applies
+ * @param horizon for forward price, carry and roll-down; empty for none
+ */
+public record PricingRequest(Optional<Method> method, Optional<Moment> horizon) {
+  /** The most accurate method, no horizon. */
+  public static final PricingRequest STANDARD =
+      new PricingRequest(Optional.empty(), Optional.empty());
+
+  public PricingRequest {
+    Objects.requireNonNull(method, "method");
+    Objects.requireNonNull(horizon, "horizon");
+  }
+}

@@ -3,6 +3,7 @@ package ebbline.cli;
 import ebbline.curve.Interpolation;
 import ebbline.data.CurveFile;
 import ebbline.data.CurveInput;
+import ebbline.data.KernelSettings;
 import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
 import ebbline.time.Moment;
@@ -31,7 +32,8 @@ final class MarketOptions {
       names = "--interpolation",
       paramLabel = "NAME",
       description =
-          "log-linear, linear-zero, cubic or monotone-convex; overrides the curve file's own")
+          "log-linear, linear-zero, cubic, monotone-convex or smith-wilson; overrides the curve"
+              + " file's own")
   private String interpolation;
 
   Optional<LocalDate> asOf() {
@@ -55,33 +57,46 @@ final class MarketOptions {
     return given;
   }
 
+  /** How the curve is to run between its nodes, where the command line says so. */
+  Optional<Interpolation> interpolation() {
+    return read("--interpolation", interpolation, Interpolation::of);
+  }
+
   boolean hasCurve() {
     return curve != null;
   }
 
   /** The curve with what the command line overrides; a command that needs one says so before. */
   CurveInput curve() {
+    return curve(KernelSettings.NONE);
+  }
+
+  /**
+   * As above.
+   *
+   * @param kernel settings of a smith-wilson curve that override the file's own
+   */
+  CurveInput curve(KernelSettings kernel) {
     if (curve == null) {
       throw new UsageProblem("--curve FILE is missing: the discount curve to work on");
     }
-    Optional<Interpolation> named = read("--interpolation", interpolation, Interpolation::of);
-    if (named.equals(Optional.of(Interpolation.SMITH_WILSON))) {
-      throw UsageProblem.of(
-          "--interpolation",
-          interpolation,
-          "expected log-linear, linear-zero, cubic or monotone-convex");
-    }
+    Optional<Interpolation> named = interpolation();
     if (curve.startsWith("flat:") && named.isPresent()) {
       throw UsageProblem.of(
           "--interpolation", interpolation, "a flat curve has no nodes to interpolate");
     }
-    return read("--curve", curve, named);
+    return read("--curve", curve, named, kernel);
   }
 
   /** A curve named by an option, for the as-of date of the command line. */
   CurveInput read(String option, String text, Optional<Interpolation> named) {
+    return read(option, text, named, KernelSettings.NONE);
+  }
+
+  private CurveInput read(
+      String option, String text, Optional<Interpolation> named, KernelSettings kernel) {
     try {
-      return CurveFile.read(text, asOf(), named);
+      return CurveFile.read(text, asOf(), named, kernel);
     } catch (InputProblems e) {
       if (text.startsWith("flat:")) {
         InputProblem problem = e.problems().get(0);

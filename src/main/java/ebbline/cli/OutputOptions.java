@@ -94,27 +94,37 @@ final class OutputOptions {
 
   /** Writes all results, to standard output or to a file that is whole or absent. */
   void write(Envelope envelope, Iterable<ResultRow> rows) {
+    write(envelope, rows, ResultRow.builder().build());
+  }
+
+  /**
+   * As above.
+   *
+   * @param beside lists and groups that belong to the whole run
+   */
+  void write(Envelope envelope, Iterable<ResultRow> rows, ResultRow beside) {
     threads(); // a wrong number is said even where one thread is all that is used
     try {
       if (out == null) {
         PrintWriter standard = command.commandLine().getOut();
-        write(standard, envelope, rows);
+        write(standard, envelope, rows, beside);
         standard.flush();
       } else {
-        AtomicFile.write(out, file -> write(file, envelope, rows));
+        AtomicFile.write(out, file -> write(file, envelope, rows, beside));
       }
     } catch (IOException e) {
       throw new java.io.UncheckedIOException(e);
     }
   }
 
-  private void write(Writer writer, Envelope envelope, Iterable<ResultRow> rows)
+  private void write(Writer writer, Envelope envelope, Iterable<ResultRow> rows, ResultRow beside)
       throws IOException {
     ResultWriter results = ResultWriter.of(format, writer);
     results.begin(envelope);
     for (ResultRow row : rows) {
       results.row(row);
     }
+    results.beside(beside);
     results.end(warnings);
   }
 }

@@ -2,7 +2,9 @@ package ebbline.data;
 
 import ebbline.time.InputProblem;
 import ebbline.time.Moment;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
@@ -32,8 +34,31 @@ final class CsvRow {
     return new CsvRow(source, line, columns, cells, own);
   }
 
+  /** The same row with values for cells that are empty or that the file has no column for. */
+  CsvRow withDefaults(Map<String, String> defaults) {
+    List<Column> more = new ArrayList<>(columns);
+    List<String> filled = new ArrayList<>(List.of(cells));
+    defaults.forEach(
+        (name, value) -> {
+          int at = index(name);
+          if (at < 0) {
+            more.add(new Column(name, name, RateText.Unit.WRITTEN, false));
+            filled.add(value);
+          } else if (filled.get(at).isBlank()) {
+            filled.set(at, value);
+          }
+        });
+    return new CsvRow(source, line, more, filled.toArray(new String[0]), problems);
+  }
+
   int line() {
     return line;
+  }
+
+  /** The unit of bare numbers in a column. */
+  RateText.Unit unit(String name) {
+    int at = index(name);
+    return at < 0 ? RateText.Unit.WRITTEN : columns.get(at).unit();
   }
 
   String source() {
@@ -106,8 +131,7 @@ final class CsvRow {
   }
 
   OptionalDouble rate(String name) {
-    int at = index(name);
-    RateText.Unit unit = at < 0 ? RateText.Unit.WRITTEN : columns.get(at).unit();
+    RateText.Unit unit = unit(name);
     return asDouble(value(name, text -> RateText.parse(text, unit)));
   }
 

@@ -12,13 +12,10 @@ import ebbline.time.TimeAxis;
 import ebbline.time.TimeAxis.TimeBasis;
 import java.time.LocalDate;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
-import java.util.stream.Collectors;
 
 /** Curve files: nodes of discount factors or zero rates, or the parameters of a formula. */
 public final class CurveFile {
@@ -30,8 +27,17 @@ public final class CurveFile {
   private static final Layout LAYOUT =
       new Layout(
           "curve file",
-          Set.of("as-of", "interpolation", "compounding", "day-count", "form"),
-          Set.of("maturity", "discount", "parameter", "value"),
+          Set.of(
+              "as-of",
+              "interpolation",
+              "compounding",
+              "day-count",
+              "form",
+              "ultimate-forward",
+              "convergence",
+              "speed",
+              "tolerance"),
+          Set.of("maturity", "discount", "kernel", "parameter", "value"),
           Set.of("zero"));
 
   private CurveFile() {}
@@ -45,9 +51,23 @@ public final class CurveFile {
    */
   public static CurveInput read(
       String spec, Optional<LocalDate> asOf, Optional<Interpolation> interpolation) {
+    return read(spec, asOf, interpolation, KernelSettings.NONE);
+  }
+
+  /**
+   * As above.
+   *
+   * @param kernel overrides the file's own settings of Smith and Wilson's curve
+   */
+  public static CurveInput read(
+      String spec,
+      Optional<LocalDate> asOf,
+      Optional<Interpolation> interpolation,
+      KernelSettings kernel) {
     return spec.startsWith(FLAT)
         ? flat(spec, asOf)
-        : new Reading(CsvTable.open(SourceFile.read(spec), LAYOUT), asOf, interpolation).curve();
+        : new Reading(CsvTable.open(SourceFile.read(spec), LAYOUT), asOf, interpolation, kernel)
+            .curve();
   }
 
   private static CurveInput flat(String spec, Optional<LocalDate> asOf) {
@@ -68,45 +88,24 @@ public final class CurveFile {
     private final CsvTable table;
     private final Optional<Interpolation> override;
     private final List<InputProblem> problems = new ArrayList<>();
+    private final SettingReader settings;
     private final TimeAxis axis;
     private final Compounding compounding;
+    private final KernelSettings kernel;
 
-    Reading(CsvTable table, Optional<LocalDate> asOf, Optional<Interpolation> interpolation) {
+    Reading(
+        CsvTable table,
+        Optional<LocalDate> asOf,
+        Optional<Interpolation> interpolation,
+        KernelSettings overrides) {
       this.table = table;
       this.override = interpolation;
-      Optional<LocalDate> own = setting("as-of", Reading::date);
-      TimeBasis basis = setting("day-count", Reading::basis).orElse(TimeBasis.ACT_365F);
+      this.settings = new SettingReader(table, problems);
+      Optional<LocalDate> own = settings.read("as-of", SettingReader::date);
+      TimeBasis basis = settings.read("day-count", SettingReader::basis).orElse(TimeBasis.ACT_365F);
       axis = asOf.or(() -> own).map(day -> TimeAxis.from(day, basis)).orElse(TimeAxis.undated());
-      compounding = setting("compounding", Compounding::of).orElse(Compounding.CONTINUOUS);
-    }
-
-    private <T> Optional<T> setting(String key, java.util.function.Function<String, T> reader) {
-      try {
-        return table.setting(key).map(s -> reader.apply(s.value()));
-      } catch (IllegalArgumentException e) {
-        problems.add(table.settingProblem(key, e.getMessage()));
-        return Optional.empty();
-      }
-    }
-
-    private static LocalDate date(String text) {
-      if (Moment.parse(text) instanceof Moment.OnDate on) {
-        return on.date();
-      }
-      throw new IllegalArgumentException("expected a date such as 2026-11-30");
-    }
-
-    private static TimeBasis basis(String text) {
-      for (TimeBasis basis : TimeBasis.values()) {
-        if (basis.label().equals(text.toLowerCase(Locale.ROOT))) {
-          return basis;
-        }
-      }
-      throw new IllegalArgumentException(
-          "expected a time basis, one of "
-              + Arrays.stream(TimeBasis.values())
-                  .map(TimeBasis::label)
-                  .collect(Collectors.joining(", ")));
+      compounding = settings.read("compounding", Compounding::of).orElse(Compounding.CONTINUOUS);
+      kernel = overrides.or(settings.kernel());
     }
 
     CurveInput curve() {
@@ -119,13 +118,15 @@ public final class CurveFile {
 
     private CurveInput nodes() {
       Interpolation named =
-          setting("interpolation", Interpolation::of).orElse(Interpolation.LOG_LINEAR);
-      if (named == Interpolation.SMITH_WILSON && override.isEmpty()) {
+          override.orElse(
+              settings.read("interpolation", Interpolation::of).orElse(Interpolation.LOG_LINEAR));
+      boolean smithWilson = named == Interpolation.SMITH_WILSON;
+      if (smithWilson) {
+        KernelNodes.requireSettings(kernel, table, problems);
+      } else if (table.hasColumn("kernel") && override.isEmpty()) {
         problems.add(
-            table.settingProblem(
-                "interpolation",
-                "this version reads no smith-wilson curve from nodes; use log-linear, linear-zero,"
-                    + " cubic or monotone-convex"));
+            table.headerProblem(
+                "kernel", "this column belongs to '# interpolation: smith-wilson'"));
       }
       for (String other : List.of("parameter", "value")) {
         if (table.hasColumn(other)) {
@@ -153,12 +154,15 @@ public final class CurveFile {
       List<String> labels = new ArrayList<>();
       List<Double> times = new ArrayList<>();
       List<Double> logs = new ArrayList<>();
+      KernelNodes kernels = new KernelNodes(kernel, smithWilson && table.hasColumn("kernel"));
       int[] rows = {0};
       table.forEachRow(
           problems,
           row -> {
             rows[0]++;
-            node(row, discounts, labels, times, logs);
+            if (node(row, discounts, labels, times, logs)) {
+              kernels.add(row);
+            }
           });
       if (rows[0] == 0 && problems.isEmpty()) {
         problems.add(
@@ -171,7 +175,8 @@ public final class CurveFile {
       throwIfAny();
       return new CurveInput(
           curve(
-              override.orElse(named),
+              named,
+              kernels,
               times.stream().mapToDouble(Double::doubleValue).toArray(),
               logs.stream().mapToDouble(Double::doubleValue).toArray()),
           axis,
@@ -179,15 +184,19 @@ public final class CurveFile {
           Optional.of(table.file()));
     }
 
-    private DiscountCurve curve(Interpolation interpolation, double[] times, double[] logs) {
+    private DiscountCurve curve(
+        Interpolation interpolation, KernelNodes kernels, double[] times, double[] logs) {
       try {
-        return InterpolatedCurve.of(interpolation, times, logs);
+        return interpolation == Interpolation.SMITH_WILSON
+            ? kernels.curve(times, logs)
+            : InterpolatedCurve.of(interpolation, times, logs);
       } catch (IllegalArgumentException e) {
         throw InputProblems.of(new InputProblem(table.file().path(), 0, "", "", e.getMessage()));
       }
     }
 
-    private void node(
+    /** Adds the row's node; whether there is one to add. */
+    private boolean node(
         CsvRow row, boolean discounts, List<String> labels, List<Double> times, List<Double> logs) {
       Optional<Moment> maturity = row.required("maturity", row.moment("maturity"));
       String column = discounts ? "discount" : "zero";
@@ -196,7 +205,7 @@ public final class CurveFile {
         row.problem(column, "", "a value is missing");
       }
       if (maturity.isEmpty()) {
-        return;
+        return false;
       }
       String label = row.text("maturity").orElseThrow();
       double time;
@@ -204,7 +213,7 @@ public final class CurveFile {
         time = axis.years(maturity.get());
       } catch (IllegalArgumentException e) {
         row.problem("maturity", label, e.getMessage());
-        return;
+        return false;
       }
       double previous = times.isEmpty() ? 0 : times.get(times.size() - 1);
       if (time == 0
@@ -212,7 +221,7 @@ public final class CurveFile {
           && discounts
           && value.isPresent()
           && value.getAsDouble() == 1) {
-        return; // discount 1 today is a knot of every curve
+        return false; // discount 1 today is a knot of every curve
       }
       if (!(time > previous)) {
         row.problem(
@@ -221,18 +230,19 @@ public final class CurveFile {
             times.isEmpty()
                 ? "a node must lie after the as-of date"
                 : "maturities must increase; the row above has " + labels.get(labels.size() - 1));
-        return;
+        return false;
       }
       if (value.isEmpty()) {
-        return;
+        return false;
       }
-      logDiscount(row, column, value.getAsDouble(), time)
-          .ifPresent(
-              log -> {
-                labels.add(label);
-                times.add(time);
-                logs.add(log);
-              });
+      Optional<Double> log = logDiscount(row, column, value.getAsDouble(), time);
+      log.ifPresent(
+          number -> {
+            labels.add(label);
+            times.add(time);
+            logs.add(number);
+          });
+      return log.isPresent();
     }
 
     private Optional<Double> logDiscount(CsvRow row, String column, double value, double time) {
@@ -240,7 +250,9 @@ public final class CurveFile {
       if (column.equals("zero") || value > 0) {
         try {
           double log =
-              column.equals("zero") ? compounding.logDiscount(value, time) : Math.log(value);
+              column.equals("zero")
+                  ? compounding.logDiscount(value, time)
+                  : DiscountDigits.log(row.text(column).orElseThrow(), value);
           if (Math.abs(log) <= FARTHEST_LOG) {
             return Optional.of(log);
           }

@@ -31,6 +31,18 @@ final class DiscountDigits {
     return exp(new BigDecimal(logDiscount)).round(new MathContext(digits));
   }
 
+  /**
+   * ln of a discount factor as a file has it: by all its digits where it has more than a double
+   * holds, which are those of a curve that was written.
+   *
+   * @param value the text as a double, above 0
+   */
+  static double log(String text, double value) {
+    return text.length() < DIGITS || text.length() > MOST_DIGITS + DIGITS
+        ? Math.log(value)
+        : log(new BigDecimal(text));
+  }
+
   /** ln of a positive number, rounded once. */
   static double log(BigDecimal discount) {
     BigDecimal y = new BigDecimal(Math.log(discount.doubleValue()));

@@ -64,6 +64,11 @@ final class CsvWriter implements ResultWriter {
   }
 
   @Override
+  public void beside(ResultRow figures) {
+    // CSV output is the results alone.
+  }
+
+  @Override
   public void end(List<String> warnings) throws IOException {
     out.flush();
   }

@@ -13,6 +13,7 @@ import java.util.Map;
 /** One JSON object: version, command, as-of date, inputs, results, warnings. */
 final class JsonWriter implements ResultWriter {
   private final JsonGenerator json;
+  private ResultRow beside = ResultRow.builder().build();
 
   JsonWriter(Writer out) {
     try {
@@ -56,8 +57,14 @@ final class JsonWriter implements ResultWriter {
   }
 
   @Override
+  public void beside(ResultRow figures) {
+    beside = figures;
+  }
+
+  @Override
   public void end(List<String> warnings) throws IOException {
     json.writeEndArray();
+    members(beside);
     json.writeArrayFieldStart("warnings");
     for (String warning : warnings) {
       json.writeString(warning);
@@ -70,11 +77,15 @@ final class JsonWriter implements ResultWriter {
 
   private void write(ResultRow row) throws IOException {
     json.writeStartObject();
+    members(row);
+    json.writeEndObject();
+  }
+
+  private void members(ResultRow row) throws IOException {
     for (Map.Entry<String, Cell> entry : row.cells().entrySet()) {
       json.writeFieldName(entry.getKey());
       write(entry.getValue());
     }
-    json.writeEndObject();
   }
 
   private void write(Cell cell) throws IOException {

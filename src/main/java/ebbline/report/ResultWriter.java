@@ -11,6 +11,9 @@ public interface ResultWriter {
 
   void row(ResultRow row) throws IOException;
 
+  /** Lists and groups that belong to the whole run, not to one result; CSV leaves them out. */
+  void beside(ResultRow figures);
+
   /**
    * @param warnings said in the JSON object; the other formats leave them to standard error
    */

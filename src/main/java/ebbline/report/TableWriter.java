@@ -17,6 +17,7 @@ final class TableWriter implements ResultWriter {
   private final Writer out;
   private final List<ResultRow> rows = new ArrayList<>();
   private List<String> order = List.of();
+  private ResultRow beside = ResultRow.builder().build();
 
   TableWriter(Writer out) {
     this.out = out;
@@ -33,6 +34,11 @@ final class TableWriter implements ResultWriter {
   }
 
   @Override
+  public void beside(ResultRow figures) {
+    beside = figures;
+  }
+
+  @Override
   public void end(List<String> warnings) throws IOException {
     if (rows.size() == 1) {
       upright(rows.get(0));
@@ -42,6 +48,7 @@ final class TableWriter implements ResultWriter {
     for (ResultRow row : rows) {
       nested(row);
     }
+    nested(beside);
     out.flush();
   }
 

@@ -1,7 +1,5 @@
 package ebbline.pricing;
 
-import ebbline.model.StandardNormal;
-
 /**
  * Options on a normal quantity, E[max(0, ±(F + sz − K))], undiscounted; any signs. Bachelier 1900.
  */
@@ -27,9 +25,6 @@ public final class BachelierFormula {
     if (deviation == 0) {
       return Math.max(0, gain);
     }
-    double d = gain / deviation;
-    // The two terms cancel by d² below the money; at d = −10 that leaves fourteen digits.
-    double sum = gain * StandardNormal.cdf(d) + deviation * StandardNormal.density(d);
-    return Math.max(0, sum);
+    return Math.max(0, gain) + OutOfTheMoney.normal(Math.abs(gain), deviation);
   }
 }

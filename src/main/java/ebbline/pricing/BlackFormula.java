@@ -1,7 +1,5 @@
 package ebbline.pricing;
 
-import ebbline.model.StandardNormal;
-
 /**
  * Options on a lognormal quantity, E[max(0, ±(F e^(vz − v²/2) − K))], undiscounted. Black 1976, J.
  * Fin. Econ. 3.
@@ -38,11 +36,8 @@ public final class BlackFormula {
     if (deviation == 0) {
       return Math.max(0, side * (forward - strike));
     }
-    double m = Math.log(forward / strike) / deviation;
-    double up = side * (m + 0.5 * deviation);
-    double down = side * (m - 0.5 * deviation);
-    double sum = side * (forward * StandardNormal.cdf(up) - strike * StandardNormal.cdf(down));
-    return Math.max(0, sum);
+    return Math.max(0, side * (forward - strike))
+        + OutOfTheMoney.lognormal(forward, strike, deviation);
   }
 
   private static void check(double forward, double deviation) {

@@ -3,6 +3,7 @@ package ebbline.cli;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.CashFlows;
 import ebbline.instrument.Claim;
+import ebbline.instrument.Optionlet;
 import ebbline.instrument.Right;
 import ebbline.pricing.IntegrationCheck;
 import ebbline.pricing.Market;
@@ -45,6 +46,10 @@ final class FlowReport {
     for (Right right : claim.rights()) {
       String name = "on exercise at " + time(right.decision());
       sum += add(rows, name, right.received(), scale, market);
+    }
+    for (Optionlet optionlet : claim.optionlets()) {
+      String name = "on exercise for the period from " + time(optionlet.start());
+      sum += add(rows, name, optionlet.exchanged(), scale, market);
     }
     rows.add(ResultRow.builder().text("flow", "sum").number("present_value", sum, 6).build());
     return rows;

@@ -32,13 +32,11 @@ final class BondOptionRow implements RowKind {
     Optional<Bond> underlying = BondRow.bond(cells);
     Optional<Moment> expiry = cells.requiredMoment("expiry");
     Optional<OptionKind> kind = cells.requiredCallOrPut();
-    OptionalDouble strike = cells.requiredNumber("strike");
+    Optional<OptionalDouble> strike = cells.requiredPriceStrike();
     BondOption.StrikeKind strikeKind =
         cells.value("strike_kind", BondOption.StrikeKind::of).orElse(BondOption.StrikeKind.CLEAN);
     return cells.build(
         underlying.isPresent() && expiry.isPresent() && kind.isPresent() && strike.isPresent(),
-        () ->
-            new BondOption(
-                kind.get(), expiry.get(), underlying.get(), strike.getAsDouble(), strikeKind));
+        () -> new BondOption(kind.get(), expiry.get(), underlying.get(), strike.get(), strikeKind));
   }
 }

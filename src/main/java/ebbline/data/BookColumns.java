@@ -1,5 +1,6 @@
 package ebbline.data;
 
+import ebbline.instrument.OptionKind;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -21,22 +22,18 @@ final class BookColumns {
           new AmortisingBondRow(),
           new SwapRow(),
           new ZeroOptionRow(),
-          new BondOptionRow());
+          new BondOptionRow(),
+          new RateOptionRow(OptionKind.CALL),
+          new RateOptionRow(OptionKind.PUT),
+          new RateOptionStripRow(OptionKind.CALL),
+          new RateOptionStripRow(OptionKind.PUT),
+          new SwaptionRow());
 
   static final Map<String, RowKind> KINDS =
       ALL.stream().collect(Collectors.toUnmodifiableMap(RowKind::name, kind -> kind));
 
   /** Kinds of the book format that this version reads and does not price. */
-  static final Set<String> LATER =
-      Set.of(
-          "callable-bond",
-          "putable-bond",
-          "caplet",
-          "floorlet",
-          "cap",
-          "floor",
-          "swaption",
-          "bermudan-swaption");
+  static final Set<String> LATER = Set.of("callable-bond", "putable-bond", "bermudan-swaption");
 
   static final Layout LAYOUT =
       new Layout(

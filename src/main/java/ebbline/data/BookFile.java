@@ -28,9 +28,10 @@ public final class BookFile {
    */
   public static BookFile open(String path, CalendarRegistry calendars) {
     CsvTable table = CsvTable.open(SourceFile.readBook(path), BookColumns.LAYOUT);
-    if (!table.hasColumn("maturity")) {
+    if (!table.hasColumn("maturity") && !table.hasColumn("tenor")) {
       throw InputProblems.of(
-          table.headerProblem("maturity", "the column is missing; every instrument needs it"));
+          table.headerProblem(
+              "maturity", "the column is missing; all instruments but swaptions need it"));
     }
     return new BookFile(table, calendars);
   }

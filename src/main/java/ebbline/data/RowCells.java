@@ -108,6 +108,22 @@ final class RowCells {
     return required("kind", OptionKind::of);
   }
 
+  /** A strike that must be there: a rate, or none inside where the row says {@code atm}. */
+  Optional<OptionalDouble> requiredRateStrike() {
+    return required("strike", text -> strike(text, RateText::parse));
+  }
+
+  /** As {@link #requiredRateStrike}, a price per 100. */
+  Optional<OptionalDouble> requiredPriceStrike() {
+    return required("strike", text -> strike(text, NumberText::parse));
+  }
+
+  private static OptionalDouble strike(String text, Function<String, Double> reader) {
+    return text.equalsIgnoreCase("atm")
+        ? OptionalDouble.empty()
+        : OptionalDouble.of(reader.apply(text));
+  }
+
   private static int frequency(String text) {
     for (String known : List.of("1", "2", "4", "12")) {
       if (known.equals(text)) {

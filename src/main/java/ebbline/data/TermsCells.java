@@ -47,10 +47,8 @@ final class TermsCells {
       RowCells cells, int frequency, DayCount dayCount, AccrualDates accrual, String start) {
     Optional<Moment> maturity = cells.requiredMoment("maturity");
     int coupons = cells.frequency(frequency);
-    DayCount counted = cells.dayCount(dayCount);
-    BusinessCalendar calendar = cells.calendar();
-    Roll roll = cells.value("roll", Roll::of).orElse(Roll.NONE);
-    boolean endOfMonth = cells.value("eom", TermsCells::yesOrNo).orElse(false);
+    Conventions conventions = conventions(cells, dayCount, accrual);
+    BusinessCalendar calendar = conventions.calendar();
     OddPeriods ends =
         new OddPeriods(
             cells.moment(start), cells.moment("first_coupon"), cells.moment("last_coupon"));
@@ -61,14 +59,21 @@ final class TermsCells {
     return cells.build(
         maturity.isPresent(),
         () ->
-            new BondTerms(
-                maturity.get(),
-                coupons,
-                redemption,
-                new Conventions(counted, calendar, roll, endOfMonth, accrual),
-                ends,
-                settleDays,
-                ex));
+            new BondTerms(maturity.get(), coupons, redemption, conventions, ends, settleDays, ex));
+  }
+
+  /**
+   * Day count, calendar and roll.
+   *
+   * @param dayCount where the row does not say
+   */
+  static Conventions conventions(RowCells cells, DayCount dayCount, AccrualDates accrual) {
+    return new Conventions(
+        cells.dayCount(dayCount),
+        cells.calendar(),
+        cells.value("roll", Roll::of).orElse(Roll.NONE),
+        cells.value("eom", TermsCells::yesOrNo).orElse(false),
+        accrual);
   }
 
   private static boolean yesOrNo(String text) {

@@ -32,9 +32,9 @@ final class ZeroOptionRow implements RowKind {
     Optional<ZeroBond> underlying = ZeroBondRow.zeroBond(cells);
     Optional<Moment> expiry = cells.requiredMoment("expiry");
     Optional<OptionKind> kind = cells.requiredCallOrPut();
-    OptionalDouble strike = cells.requiredNumber("strike");
+    Optional<OptionalDouble> strike = cells.requiredPriceStrike();
     return cells.build(
         underlying.isPresent() && expiry.isPresent() && kind.isPresent() && strike.isPresent(),
-        () -> new ZeroOption(kind.get(), expiry.get(), underlying.get(), strike.getAsDouble()));
+        () -> new ZeroOption(kind.get(), expiry.get(), underlying.get(), strike.get()));
   }
 }

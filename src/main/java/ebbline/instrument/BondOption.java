@@ -3,16 +3,21 @@ package ebbline.instrument;
 import ebbline.time.Moment;
 import ebbline.time.TimeAxis;
 import java.util.Objects;
+import java.util.OptionalDouble;
 
 /**
  * A European option on a coupon bond.
  *
  * @param expiry moment of exercise; today is allowed
- * @param strike per 100 face; finite
+ * @param strike per 100 face; absent where it is at the money, the forward price
  * @param strikeKind whether accrued interest is added to the strike
  */
 public record BondOption(
-    OptionKind option, Moment expiry, CouponBond underlying, double strike, StrikeKind strikeKind)
+    OptionKind option,
+    Moment expiry,
+    CouponBond underlying,
+    OptionalDouble strike,
+    StrikeKind strikeKind)
     implements Instrument {
 
   /** What is paid on exercise. */
@@ -37,9 +42,17 @@ public record BondOption(
     Objects.requireNonNull(expiry, "expiry");
     Objects.requireNonNull(underlying, "underlying");
     Objects.requireNonNull(strikeKind, "strikeKind");
-    if (!Double.isFinite(strike)) {
-      throw new IllegalArgumentException("strike must be finite, found " + strike);
-    }
+    StrikeTerms.requireFinite(strike);
+  }
+
+  /** At a strike. */
+  public BondOption(
+      OptionKind option,
+      Moment expiry,
+      CouponBond underlying,
+      double strike,
+      StrikeKind strikeKind) {
+    this(option, expiry, underlying, OptionalDouble.of(strike), strikeKind);
   }
 
   @Override
@@ -53,6 +66,8 @@ public record BondOption(
     PlacedLeg bond = underlying.leg().on(axis);
     CashFlows flows = bond.flowsAfter(exercise);
     double accrued = strikeKind == StrikeKind.CLEAN ? bond.accrued(exercise) : 0;
-    return OptionClaim.of(option, exercise, flows, strike + accrued);
+    OptionalDouble cash =
+        strike.isPresent() ? OptionalDouble.of(strike.getAsDouble() + accrued) : strike;
+    return OptionClaim.of(option, exercise, flows, cash);
   }
 }

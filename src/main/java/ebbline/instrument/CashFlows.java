@@ -103,6 +103,25 @@ public final class CashFlows {
     return new CashFlows(t, a);
   }
 
+  /** Flows at one time added up; those that cancel to nothing are left out. */
+  public CashFlows merged() {
+    double[] t = new double[size()];
+    double[] a = new double[size()];
+    int n = 0;
+    for (int i = 0; i < size(); ) {
+      double sum = 0;
+      int from = i;
+      while (i < size() && times[i] == times[from]) {
+        sum += amounts[i++];
+      }
+      if (sum != 0) {
+        t[n] = times[from];
+        a[n++] = sum;
+      }
+    }
+    return new CashFlows(Arrays.copyOf(t, n), Arrays.copyOf(a, n));
+  }
+
   @Override
   public boolean equals(Object other) {
     return other instanceof CashFlows that

@@ -10,6 +10,7 @@ import java.util.Objects;
  * @param flows what is paid to the holder if nobody exercises; after settlement only
  * @param rights in the order of their decisions; at most one party's each date
  * @param floating interest that is not fixed yet, in the order of payment
+ * @param optionlets options on floating rates, each by itself
  * @param settlement when the buyer pays, years from today; 0 where it settles today
  * @param accrued accrued interest at settlement, per 100 face; negative ex-dividend
  */
@@ -17,6 +18,7 @@ public record Claim(
     CashFlows flows,
     List<Right> rights,
     List<FloatingCoupon> floating,
+    List<Optionlet> optionlets,
     double settlement,
     double accrued) {
 
@@ -24,6 +26,7 @@ public record Claim(
     Objects.requireNonNull(flows, "flows");
     rights = List.copyOf(rights);
     floating = List.copyOf(floating);
+    optionlets = List.copyOf(optionlets);
     if (!(settlement >= 0 && Double.isFinite(settlement) && Double.isFinite(accrued))) {
       throw new IllegalArgumentException(
           "settlement must not be before today, found " + settlement + ", accrued " + accrued);
@@ -35,6 +38,16 @@ public record Claim(
     }
   }
 
+  /** Without options on rates. */
+  public Claim(
+      CashFlows flows,
+      List<Right> rights,
+      List<FloatingCoupon> floating,
+      double settlement,
+      double accrued) {
+    this(flows, rights, floating, List.of(), settlement, accrued);
+  }
+
   /** Fixed flows and rights alone. */
   public Claim(CashFlows flows, List<Right> rights, double settlement, double accrued) {
     this(flows, rights, List.of(), settlement, accrued);
@@ -42,7 +55,17 @@ public record Claim(
 
   /** The same terms with accrued interest as a standard rounds it. */
   public Claim withAccrued(double rounded) {
-    return new Claim(flows, rights, floating, settlement, rounded);
+    return new Claim(flows, rights, floating, optionlets, settlement, rounded);
+  }
+
+  /** Options on rates alone. */
+  public static Claim of(List<Optionlet> optionlets) {
+    return new Claim(CashFlows.NONE, List.of(), List.of(), optionlets, 0, 0);
+  }
+
+  /** Whether nobody chooses: the flows are all there is, and a curve alone prices them. */
+  public boolean isCertain() {
+    return rights.isEmpty() && optionlets.isEmpty();
   }
 
   /** Flows without rights, settled today without accrued interest. */

@@ -3,7 +3,15 @@ package ebbline.instrument;
 import ebbline.time.TimeAxis;
 
 /** What is owed, when, and who may choose: terms without prices. */
-public sealed interface Instrument permits CouponBond, FloatingNote, Swap, ZeroOption, BondOption {
+public sealed interface Instrument
+    permits CouponBond,
+        FloatingNote,
+        Swap,
+        ZeroOption,
+        BondOption,
+        RateOption,
+        RateOptionStrip,
+        Swaption {
 
   /** The name of the kind as books write it. */
   String kind();

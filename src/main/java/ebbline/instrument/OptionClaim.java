@@ -3,6 +3,8 @@ package ebbline.instrument;
 import ebbline.time.Moment;
 import ebbline.time.TimeAxis;
 import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
 
 /** An outright option as a claim: no flows of its own, one right to flows against cash. */
 final class OptionClaim {
@@ -21,12 +23,22 @@ final class OptionClaim {
    * The claim.
    *
    * @param flows what is bought or sold; only those after exercise count
-   * @param cash paid or received for them at exercise
+   * @param strike paid or received for them at exercise; absent where it is at the money
    */
-  static Claim of(OptionKind option, double exercise, CashFlows flows, double cash) {
-    CashFlows received =
-        CashFlows.single(exercise, -cash).plus(flows.after(exercise)).times(option.sign());
-    Right right = new Right(Right.Party.HOLDER, exercise, exercise, received);
+  static Claim of(OptionKind option, double exercise, CashFlows flows, OptionalDouble strike) {
+    CashFlows perUnit = CashFlows.single(exercise, -option.sign());
+    CashFlows received = flows.after(exercise).times(option.sign());
+    if (strike.isPresent()) {
+      received = perUnit.times(strike.getAsDouble()).plus(received);
+    }
+    Right right =
+        new Right(
+            Right.Party.HOLDER,
+            exercise,
+            exercise,
+            received,
+            List.of(),
+            Optional.of(new StrikeTerms(strike, perUnit)));
     return new Claim(CashFlows.NONE, List.of(right), 0, 0);
   }
 }

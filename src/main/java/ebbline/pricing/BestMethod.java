@@ -9,7 +9,7 @@ public final class BestMethod {
 
   /** Discounting without rights, a closed form for one, backward induction for more. */
   public static Valuation value(Claim claim, GaussianRates rates) {
-    if (claim.rights().isEmpty()) {
+    if (claim.isCertain()) {
       return Discounting.value(claim, rates.curve());
     }
     return ClosedForm.applies(claim)

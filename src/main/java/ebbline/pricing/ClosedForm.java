@@ -5,7 +5,8 @@ import ebbline.instrument.Right;
 import ebbline.model.GaussianRates;
 
 /**
- * Claims with at most one right, by formula: the flows, plus what the right is worth to its owner.
+ * Claims with at most one right, by formula: the flows, plus what the right is worth to its owner,
+ * plus the options on single rates.
  *
  * <p>Good to 1e-12 of the face, or 1e-10 relative where that is larger, out to strikes of five
  * standard deviations; any signs of the flows, any number of exercise regions.
@@ -26,14 +27,20 @@ public final class ClosedForm {
       throw new IllegalArgumentException(
           "a closed form exists for one right at most, found " + claim.rights().size());
     }
-    Valuation flows = Discounting.value(claim.flows(), rates.curve());
-    if (claim.rights().isEmpty()) {
-      return new Valuation(flows.presentValue(), Method.CLOSED_FORM, flows.errorBound());
+    Valuation sum = Discounting.value(claim.flows(), rates.curve());
+    if (!claim.optionlets().isEmpty()) {
+      sum = plus(sum, OptionletPricing.value(claim.optionlets(), rates));
     }
-    Valuation right = rightValue(claim, rates);
-    double sum = flows.presentValue() + right.presentValue();
+    if (!claim.rights().isEmpty()) {
+      sum = plus(sum, rightValue(claim, rates));
+    }
+    return new Valuation(sum.presentValue(), Method.CLOSED_FORM, sum.errorBound());
+  }
+
+  private static Valuation plus(Valuation one, Valuation other) {
+    double sum = one.presentValue() + other.presentValue();
     return new Valuation(
-        sum, Method.CLOSED_FORM, flows.errorBound() + right.errorBound() + 0.5 * Math.ulp(sum));
+        sum, Method.CLOSED_FORM, one.errorBound() + other.errorBound() + 0.5 * Math.ulp(sum));
   }
 
   /**

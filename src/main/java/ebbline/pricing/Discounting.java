@@ -16,11 +16,12 @@ public final class Discounting {
    * @throws IllegalArgumentException if the claim has rights
    */
   public static Valuation value(Claim claim, DiscountCurve curve) {
-    if (claim.rights().isEmpty()) {
+    if (claim.isCertain()) {
       return value(claim.flows(), curve);
     }
     throw new IllegalArgumentException(
-        "discounting alone prices no rights, found " + claim.rights().size());
+        "discounting alone prices no options, found "
+            + (claim.rights().size() + claim.optionlets().size()));
   }
 
   /** The value of flows; those at or before today count in full at their discount factor. */

@@ -34,9 +34,9 @@ public record Market(
     return new Market(axis, curve, rates, Optional.of(forwards));
   }
 
-  /** The instrument's terms here, floating rates at their forwards. */
+  /** The instrument's terms here, floating rates and strikes at the money as the curves say. */
   public Claim claim(Instrument instrument) {
-    return Projection.fixed(instrument.claim(axis), projection.orElse(curve));
+    return Projection.fixed(instrument.claim(axis), curve, projection.orElse(curve));
   }
 
   public static Market of(TimeAxis axis, DiscountCurve curve) {

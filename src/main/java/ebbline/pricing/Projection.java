@@ -4,20 +4,41 @@ import ebbline.curve.DiscountCurve;
 import ebbline.instrument.CashFlows;
 import ebbline.instrument.Claim;
 import ebbline.instrument.FloatingCoupon;
+import ebbline.instrument.Optionlet;
+import ebbline.instrument.Right;
+import ebbline.instrument.StrikeTerms;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
- * Floating coupons at the amounts that a curve's forward rates imply. For a rate fixed in advance
- * and paid at the end of its period this is what the coupon is worth, whatever the volatility.
+ * Floating interest and strikes at the money as the curves imply them.
+ *
+ * <p>A floating coupon of the claim itself stands at its forward: for a rate fixed in advance and
+ * paid at the end of its period this is what it is worth, whatever the volatility. Where a choice
+ * hangs on the floating rate it must move with the model, so there the rate's growth is held at
+ * today's multiple of the discounting curve's: the basis stands still.
  */
 final class Projection {
-  private Projection() {}
+  private final DiscountCurve discount;
+  private final DiscountCurve forwards;
 
-  /** The same claim with every floating coupon fixed at its forward. */
-  static Claim fixed(Claim claim, DiscountCurve forwards) {
-    if (claim.floating().isEmpty()) {
-      return claim;
-    }
+  private Projection(DiscountCurve discount, DiscountCurve forwards) {
+    this.discount = discount;
+    this.forwards = forwards;
+  }
+
+  /** The same claim with everything fixed that the curves can say. */
+  static Claim fixed(Claim claim, DiscountCurve discount, DiscountCurve forwards) {
+    boolean fixed =
+        claim.floating().isEmpty()
+            && claim.optionlets().isEmpty()
+            && claim.rights().stream().allMatch(Right::isFixed);
+    return fixed ? claim : new Projection(discount, forwards).of(claim);
+  }
+
+  private Claim of(Claim claim) {
     int n = claim.floating().size();
     double[] times = new double[n];
     double[] amounts = new double[n];
@@ -31,9 +52,69 @@ final class Projection {
     }
     return new Claim(
         claim.flows().plus(CashFlows.of(times, amounts)),
-        claim.rights(),
+        claim.rights().stream().map(this::right).toList(),
         List.of(),
+        optionlets(claim.optionlets()),
         claim.settlement(),
         accrued);
+  }
+
+  /** How much more than the discounting curve's the growth of the floating rate is. */
+  private double growthOver(double start, double end) {
+    if (forwards.equals(discount)) {
+      return 1;
+    }
+    return Math.exp(
+        forwards.logDiscount(start)
+            - forwards.logDiscount(end)
+            - (discount.logDiscount(start) - discount.logDiscount(end)));
+  }
+
+  private Right right(Right right) {
+    if (right.isFixed()) {
+      return right;
+    }
+    CashFlows all = right.known();
+    for (FloatingCoupon coupon : right.floating()) {
+      double later =
+          Math.exp(discount.logDiscount(coupon.payment()) - discount.logDiscount(coupon.end()));
+      double notional = coupon.notional() * later;
+      all =
+          all.plus(
+                  CashFlows.single(
+                      coupon.start(), notional * growthOver(coupon.start(), coupon.end())))
+              .plus(CashFlows.single(coupon.end(), -notional))
+              .plus(CashFlows.single(coupon.payment(), coupon.margin()));
+    }
+    Optional<StrikeTerms> strike = right.strike();
+    if (strike.isPresent() && strike.get().value().isEmpty()) {
+      CashFlows perUnit = strike.get().perUnit();
+      double atTheMoney =
+          -Discounting.value(all.merged(), discount).presentValue()
+              / Discounting.value(perUnit, discount).presentValue();
+      if (!Double.isFinite(atTheMoney)) {
+        throw new IllegalArgumentException("there is no strike at the money here");
+      }
+      strike = Optional.of(new StrikeTerms(OptionalDouble.of(atTheMoney), perUnit));
+      all = all.plus(perUnit.times(atTheMoney));
+    }
+    return right.fixed(all.merged(), strike);
+  }
+
+  private List<Optionlet> optionlets(List<Optionlet> optionlets) {
+    double interest = 0;
+    double annuity = 0;
+    for (Optionlet each : optionlets) {
+      double worth = each.notional() * discount.discount(each.end());
+      double log = forwards.logDiscount(each.start()) - forwards.logDiscount(each.end());
+      interest += worth * Math.expm1(log);
+      annuity += worth * each.accrual();
+    }
+    List<Optionlet> fixed = new ArrayList<>();
+    for (Optionlet each : optionlets) {
+      fixed.add(
+          each.at(each.strike().orElse(interest / annuity), growthOver(each.start(), each.end())));
+    }
+    return fixed;
   }
 }

@@ -39,7 +39,7 @@ public final class RowPricer implements BookPricer {
     if (row.instrument() instanceof Swap swap) {
       figures.put(PriceFigure.PAR_RATE, ParRate.of(swap, market));
       CurveSensitivity.put(row.instrument(), market, 0, figures);
-    } else if (claim.rights().isEmpty()) {
+    } else if (claim.isCertain()) {
       message = priceFigures(row, claim, value, figures);
     }
     return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, message);
@@ -71,7 +71,7 @@ public final class RowPricer implements BookPricer {
   }
 
   private Valuation value(Claim claim) {
-    if (claim.rights().isEmpty()) {
+    if (claim.isCertain()) {
       if (wanted.isPresent()
           && wanted.get() != Method.DISCOUNTING
           && wanted.get() != Method.CLOSED_FORM) {

@@ -61,7 +61,7 @@ class BookFileTest {
             b,bond-option,10,5,4%,1,2,CALL,99,cash,"c, d"
             """);
     assertThat(good(entries.get(0)).instrument().kind()).isEqualTo("zero-bond");
-    assertThat(((ZeroOption) good(entries.get(1)).instrument()).strike()).isEqualTo(80);
+    assertThat(((ZeroOption) good(entries.get(1)).instrument()).strike()).hasValue(80);
     assertThat(((BondOption) good(entries.get(2)).instrument()).strikeKind())
         .isEqualTo(BondOption.StrikeKind.CASH);
     assertThat(good(entries.get(2)).carried()).containsEntry("x-desk", "c, d");

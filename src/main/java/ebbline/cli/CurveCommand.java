@@ -10,6 +10,7 @@ import ebbline.time.Moment;
 import ebbline.time.TimeAxis;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Callable;
@@ -61,16 +62,19 @@ final class CurveCommand implements Callable<Integer> {
       description = "write the curve to FILE, whole or not at all; it reads back to the same bits")
   private Path save;
 
+  @Mixin private DrawingOptions drawing;
   @Mixin private OutputOptions output;
 
   @Override
   public Integer call() {
+    drawing.check(output.format());
     Optional<BuiltCurve> built = quotes.build(market);
     return built.isPresent() ? built(built.get()) : read(market.curve(quotes.kernel()));
   }
 
   private int read(CurveInput input) {
     List<ResultRow> rows = new ArrayList<>();
+    List<Double> marks = Arrays.stream(input.curve().nodes()).boxed().toList();
     if (at.isEmpty() && !input.labels().isEmpty()) {
       double[] nodes = input.curve().nodes();
       for (int i = 0; i < nodes.length; i++) {
@@ -80,7 +84,9 @@ final class CurveCommand implements Callable<Integer> {
       rows.addAll(rows(at.isEmpty() ? GRID : at, input.curve(), input.axis()));
     }
     save(input.curve(), input.axis());
+    drawing.picture(input.curve(), input.axis(), rows, marks, output);
     output.write(Inputs.envelope("curve", input.axis(), List.of(input.file()), List.of()), rows);
+    drawing.plot(input.curve(), rows, marks, output);
     return ExitStatus.DONE.code();
   }
 
@@ -98,6 +104,7 @@ final class CurveCommand implements Callable<Integer> {
       output.warn(built.problem());
     }
     save(built.curve(), built.axis());
+    drawing.picture(built.curve(), built.axis(), rows, built.shown(), output);
     output.write(
         Inputs.envelope(
             "curve", built.axis(), built.files().stream().map(Optional::of).toList(), List.of()),
@@ -106,6 +113,7 @@ final class CurveCommand implements Callable<Integer> {
             .rows("quotes", built.quotes())
             .put("fit", new Cell.Group(built.fit()))
             .build());
+    drawing.plot(built.curve(), rows, built.shown(), output);
     return (built.problem().isEmpty() ? ExitStatus.DONE : ExitStatus.CHECK_FAILED).code();
   }
 

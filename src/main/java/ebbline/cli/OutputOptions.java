@@ -86,6 +86,13 @@ final class OutputOptions {
     }
   }
 
+  /** Shows something below the results, on standard output. */
+  void show(String text) {
+    PrintWriter standard = command.commandLine().getOut();
+    standard.print(text);
+    standard.flush();
+  }
+
   void note(String text) {
     if (!quiet) {
       command.commandLine().getErr().println("ebbline: " + text);

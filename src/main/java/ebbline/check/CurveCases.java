@@ -1,7 +1,20 @@
 package ebbline.check;
 
+import ebbline.bond.BondYield;
 import ebbline.curve.DiscountCurve;
+import ebbline.curve.InterpolatedCurve;
+import ebbline.curve.Interpolation;
 import ebbline.curve.SvenssonCurve;
+import ebbline.instrument.Bond;
+import ebbline.instrument.BondTerms;
+import ebbline.instrument.LastPeriodRule;
+import ebbline.instrument.PriceRounding;
+import ebbline.instrument.QuoteTerms;
+import ebbline.instrument.YieldKind;
+import ebbline.time.DayCount;
+import ebbline.time.Moment;
+import ebbline.time.TimeAxis;
+import java.util.List;
 import java.util.Optional;
 
 /** Zero, forward and par rates of a Svensson curve, and a bond on given zero rates. */
@@ -54,92 +67,82 @@ final class CurveCases implements ShortRateCases.Computation {
 
   /** Semi-annual par yield between two whole years, per cent. */
   private static double par(DiscountCurve curve, int from, int to) {
-    double annuity = 0;
-    for (int k = 2 * from + 1; k <= 2 * to; k++) {
-      annuity += curve.discount(k / 2.0);
-    }
-    return 200 * (curve.discount(from) - curve.discount(to)) / annuity;
+    return 100 * QuotedCurveCases.par(from, to, 2, 0).fittedQuote(curve);
   }
 
   private static CaseResult zeroRates(PublishedCase c, CaseInputs in) {
     CaseInputs zeros = in.object("zero_cc");
-    double coupon = in.number("coupon") / in.number("freq");
+    List<String> names = zeros.names();
+    double[] times = names.stream().mapToDouble(Double::parseDouble).toArray();
+    double[] logs = new double[times.length];
     double annuity = 0;
-    double last = 1;
-    double maturity = 0;
-    for (String time : zeros.names()) {
-      maturity = Double.parseDouble(time);
-      last = Math.exp(-zeros.number(time) * maturity);
-      annuity += last;
+    for (int i = 0; i < times.length; i++) {
+      logs[i] = -zeros.number(names.get(i)) * times[i];
     }
-    double price = coupon * annuity + 100 * last;
+    DiscountCurve curve = InterpolatedCurve.of(Interpolation.LINEAR_ZERO, times, logs);
+    for (double time : times) {
+      annuity += curve.discount(time);
+    }
+    double maturity = times[times.length - 1];
+    int frequency = in.integer("freq");
     return switch (part(c)) {
-      case "price" -> CaseResult.of(c, "price of the bond", price);
+      case "price" ->
+          CaseResult.of(
+              c,
+              "price of the bond",
+              QuotedCurveCases.bond("bond", maturity, in.number("coupon"), frequency, 100)
+                  .fittedQuote(curve));
       case "yield_cc" ->
           CaseResult.of(
               c,
               "its yield, continuous",
               // the source solves from its own rounded price
-              continuousYield(98.39, coupon, in.integer("freq"), maturity));
+              continuous(maturity, in.number("coupon"), frequency).yieldOf(98.39));
       case "par" ->
-          CaseResult.of(c, "par yield, per cent", in.number("freq") * 100 * (1 - last) / annuity);
+          CaseResult.of(c, "par yield, per cent", 100 * parYield(curve, maturity, frequency));
       case "A" -> CaseResult.of(c, "annuity", annuity);
-      default -> CaseResult.of(c, "last discount factor", last);
+      default -> CaseResult.of(c, "last discount factor", curve.discount(maturity));
     };
   }
 
-  private static double continuousYield(
-      double price, double coupon, int frequency, double maturity) {
-    double low = -1;
-    double high = 1;
-    for (int i = 0; i < 200; i++) {
-      double middle = 0.5 * (low + high);
-      if (value(middle, coupon, frequency, maturity, 0) > price) {
-        low = middle;
-      } else {
-        high = middle;
-      }
-    }
-    return 0.5 * (low + high);
-  }
-
-  /** Σ t^power × flow × e^(−y t). */
-  private static double value(
-      double yield, double coupon, int frequency, double maturity, int power) {
-    double sum = 0;
-    int count = (int) Math.round(maturity * frequency);
-    for (int k = 1; k <= count; k++) {
-      double t = (double) k / frequency;
-      double flow = k == count ? coupon + 100 : coupon;
-      sum += Math.pow(t, power) * flow * Math.exp(-yield * t);
-    }
-    return sum;
+  private static double parYield(DiscountCurve curve, double maturity, int frequency) {
+    return QuotedCurveCases.par(0, maturity, frequency, 0).fittedQuote(curve);
   }
 
   private static CaseResult bond(PublishedCase c, CaseInputs in) {
-    int frequency = in.integer("freq");
-    double coupon = in.number("coupon") / frequency;
+    BondYield yields = continuous(in.number("mat"), in.number("coupon"), in.integer("freq"));
     double yield = in.number("yield_cc");
-    double price = value(yield, coupon, frequency, in.number("mat"), 0);
     return part(c).equals("price")
-        ? CaseResult.of(c, "price at a continuous yield", price)
-        : CaseResult.of(
-            c, "its duration", value(yield, coupon, frequency, in.number("mat"), 1) / price);
+        ? CaseResult.of(c, "price at a continuous yield", yields.price(yield))
+        : CaseResult.of(c, "its duration", yields.macaulayDuration(yield));
   }
 
-  /** Where the curvature loading (1 − e^(−u))/u − e^(−u) peaks, in months, at λ = 0.0609. */
+  /** A bond in bare years, coupon in per cent, with its continuously compounded yield. */
+  private static BondYield continuous(double maturity, double coupon, int frequency) {
+    Bond bond =
+        Bond.of(
+            BondTerms.of(Moment.ofYears(maturity), frequency, DayCount.ACT_ACT_ICMA), coupon / 100);
+    return BondYield.of(
+        bond.leg().on(TimeAxis.undated()).yieldTerms(),
+        new QuoteTerms(YieldKind.CONTINUOUS, LastPeriodRule.SIMPLE, PriceRounding.NONE));
+  }
+
+  /**
+   * Where the curvature loading peaks, in months, at λ = 0.0609 a month: a zero rate turns where
+   * the forward meets it.
+   */
   private static CaseResult curvatureMaximum(PublishedCase c) {
-    double low = 1;
-    double high = 3;
+    DiscountCurve loading = SvenssonCurve.nelsonSiegel(0, 0, 1, 1 / 0.0609);
+    double low = 10;
+    double high = 60;
     for (int i = 0; i < 200; i++) {
-      double u = 0.5 * (low + high);
-      double slope = (Math.exp(-u) * (u + 1) - 1) / (u * u) + Math.exp(-u);
-      if (slope > 0) {
-        low = u;
+      double months = 0.5 * (low + high);
+      if (loading.forward(months) > loading.zero(months)) {
+        low = months;
       } else {
-        high = u;
+        high = months;
       }
     }
-    return CaseResult.of(c, "months at which the curvature loading peaks", low / 0.0609);
+    return CaseResult.of(c, "months at which the curvature loading peaks", 0.5 * (low + high));
   }
 }

@@ -19,6 +19,7 @@ final class ShortRateCases implements CaseFamily {
           new HullWhiteCases(),
           new BlackCases(),
           new CurveCases(),
+          new QuotedCurveCases(),
           new NormalCases());
 
   private static final Map<String, String> LATER =

@@ -30,13 +30,18 @@ class VerificationTest {
         .allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
     assertThat(run("Black")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
     assertThat(run("convexity")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
+    assertThat(run("curves")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
   }
 
   @Test
   void everyComputedFigureAgreesWithTheIndependentRecomputation() {
     for (CaseResult result : Verification.run(c -> true)) {
       String recomputed = result.published().recomputed();
-      if (result.computed().isPresent() && !recomputed.isEmpty()) {
+      if (result.published().id().equals("CRV-EIOPA-alpha")) {
+        // The source rounds its speed up to the next multiple of 1e-6, and so do we.
+        double exact = Double.parseDouble(recomputed);
+        assertThat(result.computed().getAsDouble()).isBetween(exact, exact + 1e-6);
+      } else if (result.computed().isPresent() && !recomputed.isEmpty()) {
         double exact = Double.parseDouble(recomputed);
         assertThat(Math.abs(result.computed().getAsDouble() - exact))
             .as(result.published().id())

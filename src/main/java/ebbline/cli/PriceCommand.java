@@ -72,8 +72,17 @@ final class PriceCommand implements Callable<Integer> {
       names = "--method",
       paramLabel = "NAME",
       defaultValue = "auto",
-      description = "auto (default: the most accurate that applies) or closed-form")
+      description =
+          "auto (default: the most accurate that applies), closed-form, backward-induction or"
+              + " trinomial")
   private String method;
+
+  @Option(
+      names = "--steps",
+      paramLabel = "N",
+      defaultValue = "500",
+      description = "steps of a trinomial tree (default 500)")
+  private int steps;
 
   @Option(
       names = "--explain",
@@ -100,7 +109,7 @@ final class PriceCommand implements Callable<Integer> {
     }
     CalendarRegistry calendars = holidays.calendars();
     Optional<BookFile> file = Optional.ofNullable(book).map(path -> BookFile.open(path, calendars));
-    PricingRequest request = new PricingRequest(method(), horizon());
+    PricingRequest request = new PricingRequest(method(), steps, horizon());
     List<Optional<SourceFile>> files = new ArrayList<>();
     Optional<Market> priced = market(files);
     file.ifPresent(f -> files.add(Optional.of(f.file())));
@@ -137,12 +146,13 @@ final class PriceCommand implements Callable<Integer> {
     if (method.equals("auto")) {
       return Optional.empty();
     }
-    for (Method known : List.of(Method.CLOSED_FORM)) {
+    for (Method known : List.of(Method.CLOSED_FORM, Method.BACKWARD_INDUCTION, Method.TRINOMIAL)) {
       if (known.label().equals(method.toLowerCase(Locale.ROOT))) {
         return Optional.of(known);
       }
     }
-    throw UsageProblem.of("--method", method, "expected auto or closed-form");
+    throw UsageProblem.of(
+        "--method", method, "expected auto, closed-form, backward-induction or trinomial");
   }
 
   /** What rows are priced from; empty where each has its own quote only. */

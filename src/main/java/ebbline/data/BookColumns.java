@@ -20,6 +20,8 @@ final class BookColumns {
           new FloatingNoteRow(),
           new StepBondRow(),
           new AmortisingBondRow(),
+          new CallableBondRow("callable-bond", "calls"),
+          new CallableBondRow("putable-bond", "puts"),
           new SwapRow(),
           new ZeroOptionRow(),
           new BondOptionRow(),
@@ -27,13 +29,11 @@ final class BookColumns {
           new RateOptionRow(OptionKind.PUT),
           new RateOptionStripRow(OptionKind.CALL),
           new RateOptionStripRow(OptionKind.PUT),
-          new SwaptionRow());
+          new SwaptionRow(),
+          new BermudanSwaptionRow());
 
   static final Map<String, RowKind> KINDS =
       ALL.stream().collect(Collectors.toUnmodifiableMap(RowKind::name, kind -> kind));
-
-  /** Kinds of the book format that this version reads and does not price. */
-  static final Set<String> LATER = Set.of("callable-bond", "putable-bond", "bermudan-swaption");
 
   static final Layout LAYOUT =
       new Layout(
@@ -72,7 +72,7 @@ final class BookColumns {
               "rate_basis",
               "sinking",
               "steps"),
-          Set.of("coupon", "yield", "spread", "fixing"));
+          Set.of("coupon", "yield", "spread", "fixing", "oas"));
 
   private BookColumns() {}
 

@@ -35,11 +35,8 @@ final class BookRows {
     if (BookColumns.KINDS.containsKey(kind)) {
       foreignColumns(row, kind);
       read = read(row, id, kind, carried, calendars);
-    } else if (BookColumns.LATER.contains(kind)) {
-      row.problem("instrument", kind, "this version does not price this kind");
     } else {
       Set<String> known = new TreeSet<>(BookColumns.KINDS.keySet());
-      known.addAll(BookColumns.LATER);
       row.problem(
           "instrument",
           kind,
@@ -105,6 +102,10 @@ final class BookRows {
     if (row.has("price") && row.has("yield")) {
       row.problem("yield", row.text("yield").orElseThrow(), "give price or yield, not both");
     }
+    OptionalDouble oas = row.rate("oas");
+    if (row.has("oas") && (row.has("price") || row.has("yield"))) {
+      row.problem("oas", row.text("oas").orElseThrow(), "give price, yield or oas, not several");
+    }
     QuoteTerms quote =
         new QuoteTerms(
             row.value("yield_kind", YieldKind::of).orElse(YieldKind.STREET),
@@ -113,7 +114,7 @@ final class BookRows {
     Optional<? extends Instrument> instrument =
         BookColumns.KINDS.get(kind).read(new RowCells(row, calendars));
     return row.problems().isEmpty()
-        ? instrument.map(i -> new BookRow(id, i, face, price, yield, quote, carried))
+        ? instrument.map(i -> new BookRow(id, i, face, price, yield, oas, quote, carried))
         : Optional.empty();
   }
 }

@@ -13,6 +13,7 @@ import java.util.OptionalDouble;
  * @param face money; negative is short
  * @param price quoted clean price per 100, if given
  * @param yield quoted yield, a decimal, if given
+ * @param oas quoted option-adjusted spread, a decimal, if given; of rows with rights
  * @param quote what yields mean
  * @param carried the book's own columns {@code x-…}, in order
  */
@@ -22,6 +23,7 @@ public record BookRow(
     double face,
     OptionalDouble price,
     OptionalDouble yield,
+    OptionalDouble oas,
     QuoteTerms quote,
     Map<String, String> carried) {
 
@@ -33,7 +35,7 @@ public record BookRow(
       OptionalDouble price,
       OptionalDouble yield,
       Map<String, String> carried) {
-    this(id, instrument, face, price, yield, QuoteTerms.STANDARD, carried);
+    this(id, instrument, face, price, yield, OptionalDouble.empty(), QuoteTerms.STANDARD, carried);
   }
 
   public BookRow {

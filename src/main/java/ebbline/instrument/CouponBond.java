@@ -1,6 +1,7 @@
 package ebbline.instrument;
 
 import ebbline.time.TimeAxis;
+import java.util.Optional;
 
 /** Paper with fixed payments and no rights. */
 public sealed interface CouponBond extends Instrument
@@ -11,5 +12,10 @@ public sealed interface CouponBond extends Instrument
   @Override
   default Claim claim(TimeAxis axis) {
     return leg().on(axis).claim();
+  }
+
+  @Override
+  default Optional<FixedLeg> fixedLeg() {
+    return Optional.of(leg());
   }
 }

@@ -1,12 +1,15 @@
 package ebbline.instrument;
 
 import ebbline.time.TimeAxis;
+import java.util.Optional;
 
 /** What is owed, when, and who may choose: terms without prices. */
 public sealed interface Instrument
     permits CouponBond,
         FloatingNote,
         Swap,
+        CallableBond,
+        BermudanSwaption,
         ZeroOption,
         BondOption,
         RateOption,
@@ -23,4 +26,9 @@ public sealed interface Instrument
    *     expired, a date without an as-of date)
    */
   Claim claim(TimeAxis axis);
+
+  /** Fixed payments that are made if nobody exercises; empty where there are none. */
+  default Optional<FixedLeg> fixedLeg() {
+    return Optional.empty();
+  }
 }

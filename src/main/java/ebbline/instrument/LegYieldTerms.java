@@ -5,7 +5,9 @@ import ebbline.time.DayCount;
 import ebbline.time.TimeAxis;
 import java.time.LocalDate;
 import java.time.temporal.ChronoUnit;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
 
 /** How far away, in coupon periods and in years, the payments of a leg lie at settlement. */
 final class LegYieldTerms {
@@ -18,37 +20,79 @@ final class LegYieldTerms {
   }
 
   YieldTerms terms() {
-    List<Integer> left = leg.owedAfter(settlement);
-    int n = left.size();
-    double[] amounts = new double[n];
-    double[] periods = new double[n];
-    double[] paid = new double[n];
-    double[] years = new double[n];
-    double soFar = 0;
-    int next = 0;
-    int periodsLeft = 0;
-    for (int i = 0; i < leg.periods().size(); i++) {
-      LegPeriod period = leg.periods().get(i);
-      if (period.end() > settlement + TimeAxis.SAME_MOMENT) {
-        soFar += parts(period);
-        periodsLeft++;
-      }
-      if (next < n && left.get(next) == i) {
-        amounts[next] = leg.amount(i, settlement);
-        periods[next] = soFar;
-        paid[next] = soFar + delay(period);
-        years[next] = years(period, soFar);
-        next++;
-      }
-    }
     LegPeriod last = leg.periods().get(leg.periods().size() - 1);
-    return YieldTerms.builder(leg.terms().frequency(), amounts)
-        .at(periods, paid, years)
-        .periodsLeft(periodsLeft)
-        .interest(leg.accrued(settlement), leg.annualCoupon(settlement))
-        .redemption(leg.redemptionAfter(settlement))
+    Collected all = collect(Double.POSITIVE_INFINITY, 0);
+    return all.terms(leg.redemptionAfter(settlement))
         .life(life(last, DayCount.ACT_365F), life(last, leg.dayCount()))
         .build();
+  }
+
+  /** The terms if {@code amount} ends them early; days to that end count as actual ones. */
+  YieldTerms termsTo(double end, double amount) {
+    double years =
+        leg.isDated()
+            ? ChronoUnit.DAYS.between(date(settlement), date(end)) / 365.0
+            : end - settlement;
+    return collect(end, amount).terms(OptionalDouble.of(amount)).life(years, years).build();
+  }
+
+  private LocalDate date(double time) {
+    return leg.dateAt(time);
+  }
+
+  /** Payments up to an end, and how far away they are. */
+  private final class Collected {
+    private final List<double[]> payments = new ArrayList<>();
+    private int periodsLeft;
+
+    void add(double amount, double periods, double paidPeriods, double years) {
+      payments.add(new double[] {amount, periods, paidPeriods, years});
+    }
+
+    YieldTerms.Builder terms(OptionalDouble redemption) {
+      return YieldTerms.builder(leg.terms().frequency(), column(0))
+          .at(column(1), column(2), column(3))
+          .periodsLeft(periodsLeft)
+          .interest(leg.accrued(settlement), leg.annualCoupon(settlement))
+          .redemption(redemption);
+    }
+
+    private double[] column(int j) {
+      return payments.stream().mapToDouble(each -> each[j]).toArray();
+    }
+  }
+
+  private Collected collect(double end, double amount) {
+    Collected found = new Collected();
+    List<Integer> left = leg.owedAfter(settlement);
+    double soFar = 0;
+    int next = 0;
+    for (int i = 0; i < leg.periods().size(); i++) {
+      LegPeriod period = leg.periods().get(i);
+      double before = soFar;
+      if (period.end() > settlement + TimeAxis.SAME_MOMENT) {
+        soFar += parts(period);
+        found.periodsLeft++;
+      }
+      if (period.end() > end + TimeAxis.SAME_MOMENT) {
+        double within =
+            1 - (period.end() - end) / (period.end() - Math.max(period.start(), settlement));
+        double at = before + within * (soFar - before);
+        found.add(amount, at, at, at / leg.terms().frequency());
+        return found;
+      }
+      boolean owed = next < left.size() && left.get(next) == i;
+      next += owed ? 1 : 0;
+      if (owed || Math.abs(period.end() - end) <= TimeAxis.SAME_MOMENT) {
+        boolean last = period.end() >= end - TimeAxis.SAME_MOMENT;
+        double paid = leg.amount(i, settlement) + (last ? amount : 0);
+        found.add(paid, soFar, soFar + delay(period), years(period, soFar));
+        if (last) {
+          return found;
+        }
+      }
+    }
+    return found;
   }
 
   /** Periods from settlement or the period's start, whichever is later, to its end. */

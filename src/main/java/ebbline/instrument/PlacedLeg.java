@@ -192,6 +192,15 @@ public final class PlacedLeg {
         .toArray();
   }
 
+  /** When money due at a moment is paid: there, or where the roll moves it. */
+  double payment(double time) {
+    if (!dated) {
+      return time;
+    }
+    Conventions how = leg.terms().conventions();
+    return axis.years(how.roll().apply(dateAt(time), how.calendar()));
+  }
+
   /** The last payment, in years. */
   public double lastPayment() {
     return periods.get(periods.size() - 1).payment();
@@ -206,6 +215,17 @@ public final class PlacedLeg {
   /** What price and yield are made of, at settlement. */
   public YieldTerms yieldTerms() {
     return new LegYieldTerms(this, settlement()).terms();
+  }
+
+  /**
+   * What price and yield are made of, at settlement, if the paper is repaid early.
+   *
+   * @param end of interest, after settlement, years
+   * @param price clean, per 100 of what is still owed then
+   */
+  public YieldTerms yieldTermsTo(double end, double price) {
+    double amount = price * outstanding(end) / 100 + accrued(end);
+    return new LegYieldTerms(this, settlement()).termsTo(end, amount);
   }
 
   /** What the coupon that runs at a moment, or the first one after it, pays a year, per 100. */

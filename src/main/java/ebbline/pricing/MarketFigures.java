@@ -5,7 +5,6 @@ import ebbline.bond.PrintedPrice;
 import ebbline.bond.ZSpread;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Claim;
-import ebbline.instrument.CouponBond;
 import ebbline.instrument.PlacedLeg;
 import ebbline.instrument.PriceRounding;
 import java.util.EnumMap;
@@ -39,7 +38,7 @@ final class MarketFigures {
 
   /** Adds the figures. */
   static void put(
-      BookRow row,
+      Optional<PlacedLeg> fixed,
       Claim claim,
       Market market,
       double quoted,
@@ -52,8 +51,8 @@ final class MarketFigures {
         PriceFigure.Z_SPREAD,
         ZSpread.of(claim.flows(), market.curve(), claim.settlement(), quoted));
     figures.put(PriceFigure.RICHNESS, clean - figures.get(PriceFigure.CLEAN_PRICE));
-    if (row.instrument() instanceof CouponBond bond) {
-      PlacedLeg leg = bond.leg().on(market.axis());
+    if (fixed.isPresent()) {
+      PlacedLeg leg = fixed.get();
       double[] payments = leg.paymentsAfter(claim.settlement());
       double[] faces = new double[payments.length];
       double before = claim.settlement();

@@ -31,8 +31,10 @@ public enum PriceFigure {
   OAS("oas", Unit.RATE),
   EFFECTIVE_DURATION("effective_duration", Unit.YEARS),
   EFFECTIVE_CONVEXITY("effective_convexity", Unit.YEARS),
-  /** Money the rights inside the instrument are worth. */
+  /** Money the rights inside the instrument are worth to the holder; negative against him. */
   OPTION_VALUE("option_value", Unit.MONEY),
+  /** Change of the dirty price for one basis point more volatility, per 100. */
+  VEGA("vega", Unit.PRICE),
   IMPLIED_VOL("implied_vol", Unit.RATE),
   /** Price for delivery at the horizon, clean, per 100. */
   FORWARD_PRICE("forward_price", Unit.PRICE),

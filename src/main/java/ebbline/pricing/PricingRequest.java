@@ -8,12 +8,16 @@ import java.util.Optional;
  * What the user asks of a pricing run.
  *
  * @param method to price by; empty for the most accurate that applies
+ * @param steps of a tree
  * @param horizon for forward price, carry and roll-down; empty for none
  */
-public record PricingRequest(Optional<Method> method, Optional<Moment> horizon) {
+public record PricingRequest(Optional<Method> method, int steps, Optional<Moment> horizon) {
+  /** Steps of a tree where the user gives none. */
+  public static final int STEPS = 500;
+
   /** The most accurate method, no horizon. */
   public static final PricingRequest STANDARD =
-      new PricingRequest(Optional.empty(), Optional.empty());
+      new PricingRequest(Optional.empty(), STEPS, Optional.empty());
 
   public PricingRequest {
     Objects.requireNonNull(method, "method");

@@ -1,8 +1,8 @@
 package ebbline.pricing;
 
 import ebbline.instrument.BookRow;
+import ebbline.instrument.CallableBond;
 import ebbline.instrument.Claim;
-import ebbline.instrument.CouponBond;
 import ebbline.instrument.PlacedLeg;
 import ebbline.time.TimeAxis;
 import java.util.EnumMap;
@@ -29,13 +29,17 @@ public final class QuotedRows implements BookPricer {
   }
 
   private PricedRow priced(BookRow row) {
-    if (!(row.instrument() instanceof CouponBond bond)) {
-      throw new IllegalArgumentException(
-          "a "
-              + row.instrument().kind()
-              + " needs a curve or a model to be priced from: give --curve FILE or --model");
-    }
-    PlacedLeg leg = bond.leg().on(axis);
+    PlacedLeg leg =
+        row.instrument()
+            .fixedLeg()
+            .orElseThrow(
+                () ->
+                    new IllegalArgumentException(
+                        "a "
+                            + row.instrument().kind()
+                            + " needs a curve or a model to be priced from: give --curve FILE or"
+                            + " --model"))
+            .on(axis);
     Claim claim = MarketFigures.printed(row, leg.claim());
     YieldFigures yields = new YieldFigures(leg, row.quote());
     double dirty =
@@ -50,6 +54,9 @@ public final class QuotedRows implements BookPricer {
     figures.put(PriceFigure.CLEAN_PRICE, dirty - claim.accrued());
     figures.put(PriceFigure.ACCRUED, claim.accrued());
     yields.put(dirty, figures);
+    if (row.instrument() instanceof CallableBond bond) {
+      figures.put(PriceFigure.YIELD_TO_WORST, YieldToWorst.of(bond, leg, row.quote(), dirty, axis));
+    }
     double scale = row.face() / 100;
     // A unit of rounding for each flow's product and sum.
     double bound = (4 + 2.0 * claim.flows().size()) * Math.ulp(dirty);

@@ -121,10 +121,11 @@ class RowPricerTest {
   @Test
   void aMethodThatDoesNotApplyIsRefusedInTheRow() {
     PricedRow failed =
-        new RowPricer(FLAT, new PricingRequest(Optional.of(Method.TRINOMIAL), Optional.empty()))
+        new RowPricer(
+                FLAT, new PricingRequest(Optional.of(Method.SIMULATION), 500, Optional.empty()))
             .price(row(BOND, 100));
     assertThat(failed.hasFailed()).isTrue();
-    assertThat(failed.message()).contains("without rights");
+    assertThat(failed.message()).contains("does not price this row");
   }
 
   @Test

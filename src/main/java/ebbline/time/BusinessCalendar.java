@@ -165,13 +165,32 @@ public final class BusinessCalendar {
     if (to.isBefore(from)) {
       return -businessDays(to, from);
     }
-    int count = 0;
-    for (LocalDate day = from; day.isBefore(to); day = day.plusDays(1)) {
-      if (isBusinessDay(day)) {
-        count++;
-      }
+    if (from.equals(to)) {
+      return 0;
     }
-    return count;
+    isBusinessDay(from); // both ends lie in the years known, so every day between does
+    isBusinessDay(to.minusDays(1));
+    long first = from.toEpochDay();
+    long last = to.toEpochDay();
+    long count = weekdaysBefore(last) - weekdaysBefore(first);
+    int beyond = (int) (last - origin);
+    for (int day = holidays.nextSetBit((int) (first - origin));
+        day >= 0 && day < beyond;
+        day = holidays.nextSetBit(day + 1)) {
+      count -= isWeekday(origin + day) ? 1 : 0;
+    }
+    return (int) count;
+  }
+
+  /** Weekdays from Thursday 1 January 1970 to a day, that excluded; negative before. */
+  private static long weekdaysBefore(long day) {
+    // Counted from the Monday of that week, which lies three days before it.
+    long fromMonday = day + 3;
+    return 5 * Math.floorDiv(fromMonday, 7L) + Math.min(5, Math.floorMod(fromMonday, 7L));
+  }
+
+  private static boolean isWeekday(long day) {
+    return Math.floorMod(day + 3, 7L) < 5;
   }
 
   @Override

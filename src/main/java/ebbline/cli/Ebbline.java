@@ -51,6 +51,7 @@ final class Ebbline implements Runnable {
   private static void addCommands(CommandLine line, String[] args) {
     Map<String, Supplier<Object>> commands = new LinkedHashMap<>();
     commands.put("curve", CurveCommand::new);
+    commands.put("estimate", EstimateCommand::new);
     commands.put("calibrate", CalibrateCommand::new);
     commands.put("price", PriceCommand::new);
     commands.put("verify", VerifyCommand::new);

@@ -4,6 +4,7 @@ import ebbline.fitting.history.RateHistory;
 import ebbline.time.InputProblem;
 import ebbline.time.InputProblems;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -60,6 +61,7 @@ public final class HistoryFile {
         RateHistory.of(times.times(), rates.stream().mapToDouble(Double::doubleValue).toArray()),
         chosen.heading(),
         times.dates(),
+        times.dates().isEmpty() ? List.of() : Arrays.stream(times.times()).boxed().toList(),
         table.file());
   }
 

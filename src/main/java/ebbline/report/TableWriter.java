@@ -64,6 +64,7 @@ final class TableWriter implements ResultWriter {
       } else if (entry.getValue() instanceof Cell.Group group) {
         out.write("\n" + title + "\n");
         upright(group.row());
+        nested(group.row());
       }
     }
   }

@@ -10,7 +10,8 @@ import java.util.function.DoublePredicate;
  * does not refuse, so their coverage does not suffer from the bias of κ as percentile intervals'
  * does [Hansen 1999, Review of Economics and Statistics 81].
  *
- * @param meanReversion κ; low end 0 where no reversion is not refused
+ * @param meanReversion κ; low end 0 where no reversion is not refused, both absent where every one
+ *     is
  * @param longRunMean θ; a side is absent where the sample does not bound it
  * @param volatility σ
  * @param halfLife years; high end absent where the low end of κ is 0
@@ -24,6 +25,10 @@ public record HistoryIntervals(
     String remark) {
 
   private static final int HALVINGS = 40;
+
+  private static final String RUNS_AWAY =
+      "the rates run away from any mean faster than chance explains: every mean reversion of 0 or"
+          + " more is refused, and there is no interval for it or the long-run mean";
 
   /** Reversion × span at which the law of the mean's test is tabulated. */
   private static final double[] GRID = {
@@ -47,6 +52,11 @@ public record HistoryIntervals(
     ReversionLaw law = new ReversionLaw(tested.transitions(), resampling);
     Interval kappa = reversion(tested, law, history, confidence);
     Interval theta = mean(tested, law, history, estimate, confidence);
+    if (kappa.high().isEmpty()) {
+      Interval none = new Interval(OptionalDouble.empty(), OptionalDouble.empty(), confidence);
+      return new HistoryIntervals(
+          none, none, bootstrap.volatilityByRatio(confidence), none, RUNS_AWAY);
+    }
     double low = kappa.low().orElseThrow();
     double high = kappa.high().orElseThrow();
     Interval halfLife =
@@ -112,7 +122,10 @@ public record HistoryIntervals(
     double top = 20 / history.step();
     double low =
         tooSmall.test(0) ? boundary(tooSmall.negate(), 0, Math.max(best, 1 / span), top) : 0;
-    double high = tooLarge.test(0) ? 0 : boundary(tooLarge, 0, Math.max(best, 1 / span), top);
+    if (tooLarge.test(0)) {
+      return new Interval(OptionalDouble.empty(), OptionalDouble.empty(), confidence);
+    }
+    double high = boundary(tooLarge, 0, Math.max(best, 1 / span), top);
     return Interval.of(low, Math.max(low, high), confidence);
   }
 

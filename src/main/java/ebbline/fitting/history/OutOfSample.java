@@ -39,6 +39,9 @@ public record OutOfSample(
   /** Estimates are renewed at most this often: on long histories one more rate changes nothing. */
   private static final int RENEWALS = 400;
 
+  /** ... and on uneven steps, where one estimate is a search. */
+  private static final int SEARCHES = 60;
+
   private static final int FEWEST = 8;
 
   /**
@@ -60,7 +63,7 @@ public record OutOfSample(
     NormalDistribution standard = NormalDistribution.of(0, 1);
     double reach = standard.inverseSurvivalProbability(0.5 * (1 - confidence));
     double[] transforms = new double[size - start];
-    int every = Math.max(1, (size - start) / RENEWALS);
+    int every = Math.max(1, (size - start) / (history.isRegular() ? RENEWALS : SEARCHES));
     Forecaster forecaster = null;
     int near = 0;
     int far = 0;

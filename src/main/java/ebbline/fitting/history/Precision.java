@@ -43,6 +43,18 @@ public final class Precision {
     return Math.log(2) / (meanReversion * meanReversion) * meanReversionError();
   }
 
+  /** Standard error of the stationary deviation σ/√(2κ). */
+  public double stationaryDeviationError(RateLaw law) {
+    double deviation = law.stationary().standardDeviation();
+    double byKappa = -0.5 * deviation / law.meanReversion();
+    double bySigma = law.volatility() > 0 ? deviation / law.volatility() : 0;
+    double variance =
+        byKappa * byKappa * covariance[0][0]
+            + 2 * byKappa * bySigma * covariance[0][2]
+            + bySigma * bySigma * covariance[2][2];
+    return Math.sqrt(Math.max(0, variance));
+  }
+
   /** The covariance of (κ, θ, σ) in this order; a fresh array. */
   public double[][] covariance() {
     return Arrays.stream(covariance).map(double[]::clone).toArray(double[][]::new);

@@ -27,6 +27,7 @@ public final class Coprocess {
     Map<String, Kernel> kernels = new LinkedHashMap<>();
     kernels.put("pv_walk", new Kernel(load::bondsByWalking, load.bondFlows, load.bondValues));
     kernels.put("pv_day", new Kernel(load::bondsByDay, load.bondFlows, load.bondValues));
+    kernels.put("full", new Kernel(load::bondMeasures, load.bondFlows, load.bondYields));
     double zeros = load.zeroValues.length;
     kernels.put("zbo", new Kernel(load::zeroOptionsAlone, zeros, load.zeroValues));
     kernels.put("zbo_blocks", new Kernel(load::zeroOptionsInBlocks, zeros, load.zeroValues));

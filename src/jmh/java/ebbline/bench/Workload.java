@@ -8,6 +8,7 @@ import ebbline.model.GaussianRates;
 import ebbline.model.HullWhite;
 import ebbline.model.VolatilitySteps;
 import ebbline.pricing.CouponOptions;
+import ebbline.pricing.LevelBonds;
 import ebbline.pricing.ZeroOptions;
 import java.io.IOException;
 import java.io.UncheckedIOException;
@@ -35,6 +36,11 @@ final class Workload {
   final double[] swaptionValues = new double[SWAPTIONS];
   final long bondFlows;
 
+  final double[] bondYields;
+
+  private final LevelBonds levelBonds = new LevelBonds();
+  private final LevelBonds.Bonds level;
+  private final LevelBonds.Figures levelFigures;
   private final ZeroOptions zeroOptions;
   private final CouponOptions couponOptions;
   private final double[] firstFlow;
@@ -80,6 +86,17 @@ final class Workload {
     }
     offsets[n] = (int) flows;
     bondFlows = flows;
+    double[] toFirst = new double[n];
+    double[] payments = new double[n];
+    double[] redemption = new double[n];
+    for (int i = 0; i < n; i++) {
+      toFirst[i] = 2 * firstFlow[i];
+      payments[i] = flowCounts[i];
+      redemption[i] = 100;
+    }
+    level = new LevelBonds.Bonds(2, halfCoupon, redemption, payments, toFirst, bonds[2]);
+    levelFigures = new LevelBonds.Figures(n);
+    bondYields = levelFigures.yield;
     flowDays = new int[(int) flows];
     for (int i = 0, q = 0; i < n; i++) {
       int last = (int) (bonds[0][i] * DAYS_PER_YEAR);
@@ -133,6 +150,16 @@ final class Workload {
               + 100 * table.discount(flowDays[end - 1]);
     }
     return sum(bondValues);
+  }
+
+  /** Present values from the day table, and yields, durations, convexities, dv01 of the prices. */
+  double bondMeasures() {
+    levelBonds.measure(level, levelFigures);
+    return bondsByDay()
+        + sum(levelFigures.yield)
+        + sum(levelFigures.modifiedDuration)
+        + sum(levelFigures.convexity)
+        + sum(levelFigures.dv01);
   }
 
   double zeroOptionsAlone() {

@@ -9,7 +9,8 @@ import java.util.OptionalDouble;
 /**
  * A note whose coupons are a floating rate plus a spread, fixed in advance and paid in arrears.
  *
- * @param running the whole coupon of the period that runs today, annual; needed where one does
+ * @param running the whole coupon of the period that runs today, annual; needed where one began
+ *     before today, and used where one begins today
  * @param spread over the floating rate, annual, a decimal
  */
 public record FloatingNote(BondTerms terms, OptionalDouble running, double spread)
@@ -41,7 +42,7 @@ public record FloatingNote(BondTerms terms, OptionalDouble running, double sprea
       LegPeriod period = leg.periods().get(i);
       boolean owed = leg.isOwed(i, settlement);
       double part = i == at ? leg.accruedYears(i, settlement) / period.years() : 0;
-      if (period.start() < -TimeAxis.SAME_MOMENT) {
+      if (period.runsToday(running.isPresent())) {
         double coupon = 100 * known() * period.years();
         accrued += i == at ? coupon * part - (owed ? 0 : coupon) : 0;
         if (owed) {

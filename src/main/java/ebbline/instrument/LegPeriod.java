@@ -1,6 +1,7 @@
 package ebbline.instrument;
 
 import ebbline.time.CouponPeriod;
+import ebbline.time.TimeAxis;
 import java.util.Optional;
 
 /**
@@ -19,4 +20,13 @@ public record LegPeriod(
     double payment,
     double years,
     boolean regular,
-    Optional<CouponPeriod> dated) {}
+    Optional<CouponPeriod> dated) {
+
+  /**
+   * Whether the period's floating rate is fixed already: it began before today, or begins today and
+   * its rate is given.
+   */
+  boolean runsToday(boolean given) {
+    return start < -TimeAxis.SAME_MOMENT || (given && start <= TimeAxis.SAME_MOMENT);
+  }
+}

@@ -13,7 +13,8 @@ import java.util.OptionalDouble;
  * @param side of the fixed rate
  * @param terms schedule of both legs; its issue is the start, today where there is none
  * @param rate fixed, annual, a decimal
- * @param fixing floating rate of the period that runs today, annual; needed where one does
+ * @param fixing floating rate of the period that runs today, annual; needed where one began before
+ *     today, and used where one begins today
  */
 public record Swap(SwapSide side, BondTerms terms, double rate, OptionalDouble fixing)
     implements Instrument {
@@ -41,7 +42,7 @@ public record Swap(SwapSide side, BondTerms terms, double rate, OptionalDouble f
     for (int i = 0; i < leg.periods().size(); i++) {
       LegPeriod period = leg.periods().get(i);
       fixed = fixed.plus(CashFlows.single(period.payment(), sign * leg.coupon(i)));
-      if (period.start() < -TimeAxis.SAME_MOMENT) {
+      if (period.runsToday(fixing.isPresent())) {
         double known = -sign * 100 * known() * period.years();
         fixed = fixed.plus(CashFlows.single(period.payment(), known));
       } else {

@@ -151,6 +151,10 @@ class LegInstrumentsTest {
     assertThat(claim.floating()).hasSize(2);
     assertThat(claim.floating().get(0).margin()).isCloseTo(0.1, within(1e-15));
     assertThat(claim.accrued()).isCloseTo(2 * 94 / 184.0, within(1e-13));
+    FloatingNote today = new FloatingNote(terms("5", 2), OptionalDouble.of(0.04), 0.002);
+    assertThat(today.claim(TimeAxis.undated()).flows().amounts())
+        .containsExactly(new double[] {2, 100}, within(1e-14));
+    assertThat(today.claim(TimeAxis.undated()).floating()).hasSize(9);
     FloatingNote unknown = new FloatingNote(terms("2028-02-28", 2), OptionalDouble.empty(), 0.002);
     assertThatThrownBy(() -> unknown.claim(TODAY)).hasMessageContaining("give it as coupon");
   }

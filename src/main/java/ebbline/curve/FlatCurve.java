@@ -1,7 +1,7 @@
 package ebbline.curve;
 
 /** One continuously compounded rate for all maturities. */
-public final class FlatCurve implements DiscountCurve {
+public final class FlatCurve implements FormulaCurve {
   private final double rate;
 
   private FlatCurve(double rate) {
@@ -40,25 +40,5 @@ public final class FlatCurve implements DiscountCurve {
   @Override
   public double zero(double t) {
     return rate;
-  }
-
-  @Override
-  public double[] nodes() {
-    return new double[0];
-  }
-
-  @Override
-  public void addLogDiscountGradient(double t, double weight, double[] gradient) {
-    // No nodes, nothing to add.
-  }
-
-  @Override
-  public double[] breaks() {
-    return new double[] {0};
-  }
-
-  @Override
-  public boolean hasContinuousForward() {
-    return true;
   }
 }

@@ -5,7 +5,7 @@ package ebbline.curve;
  * [Svensson 1994, NBER working paper 4871]; without the last term Nelson and Siegel's [1987, J. of
  * Business 60(4)].
  */
-public final class SvenssonCurve implements DiscountCurve {
+public final class SvenssonCurve implements FormulaCurve {
   private final double beta0;
   private final double beta1;
   private final double beta2;
@@ -88,25 +88,5 @@ public final class SvenssonCurve implements DiscountCurve {
     double u = t / tau1;
     return (beta2 * Loadings.humpSlope(u) - beta1 * Loadings.decay(u)) / tau1
         + beta3 * Loadings.humpSlope(t / tau2) / tau2;
-  }
-
-  @Override
-  public double[] nodes() {
-    return new double[0];
-  }
-
-  @Override
-  public void addLogDiscountGradient(double t, double weight, double[] gradient) {
-    // No nodes, nothing to add.
-  }
-
-  @Override
-  public double[] breaks() {
-    return new double[] {0};
-  }
-
-  @Override
-  public boolean hasContinuousForward() {
-    return true;
   }
 }

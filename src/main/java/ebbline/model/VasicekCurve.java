@@ -1,6 +1,6 @@
 package ebbline.model;
 
-import ebbline.curve.DiscountCurve;
+import ebbline.curve.FormulaCurve;
 import java.util.Objects;
 
 /**
@@ -11,7 +11,7 @@ import java.util.Objects;
  *
  * @param model its parameters
  */
-public record VasicekCurve(Vasicek model) implements DiscountCurve {
+public record VasicekCurve(Vasicek model) implements FormulaCurve {
   /*
    * The exponent may reach 20 and, with negative κ, 200: a rounding of its last bit is then 1e-14 in the price. So
    * it is summed in twofold arithmetic, product aτ included, and its low part goes into the exponential.
@@ -60,25 +60,5 @@ public record VasicekCurve(Vasicek model) implements DiscountCurve {
     double sigma = model.volatility();
     return Math.exp(-a * t)
         * (a * (model.longRunMean() - model.shortRate()) - sigma * sigma * Reversion.g(a, t));
-  }
-
-  @Override
-  public double[] nodes() {
-    return new double[0];
-  }
-
-  @Override
-  public void addLogDiscountGradient(double t, double weight, double[] gradient) {
-    // No nodes, nothing to add.
-  }
-
-  @Override
-  public double[] breaks() {
-    return new double[] {0};
-  }
-
-  @Override
-  public boolean hasContinuousForward() {
-    return true;
   }
 }

@@ -36,7 +36,7 @@ final class PublishedCases {
     return row.get(header.indexOf(column));
   }
 
-  private static String text(String resource) {
+  static String text(String resource) {
     try (InputStream in = PublishedCases.class.getResourceAsStream(resource)) {
       if (in == null) {
         throw new IllegalStateException("the program lacks its resource " + resource);

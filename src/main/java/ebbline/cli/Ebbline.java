@@ -54,6 +54,7 @@ final class Ebbline implements Runnable {
     commands.put("estimate", EstimateCommand::new);
     commands.put("calibrate", CalibrateCommand::new);
     commands.put("price", PriceCommand::new);
+    commands.put("simulate", SimulateCommand::new);
     commands.put("verify", VerifyCommand::new);
     Supplier<Object> named = args.length == 0 ? null : commands.get(args[0]);
     if (named != null) {

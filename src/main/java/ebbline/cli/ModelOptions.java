@@ -78,6 +78,14 @@ final class ModelOptions {
     }
   }
 
+  /** The model of a command that needs one and takes it under either measure. */
+  ModelInput anyMeasure(MarketOptions market) {
+    if (isNamed("vasicek") || isNamed("hull-white")) {
+      return model(market).orElseThrow();
+    }
+    return read(market);
+  }
+
   /** The model, read or put together; empty where none is named. */
   Optional<ModelInput> model(MarketOptions market) {
     if (model == null) {
@@ -140,14 +148,7 @@ final class ModelOptions {
   }
 
   private ModelInput file(MarketOptions market) {
-    if (!parametersGiven().isEmpty()) {
-      throw new UsageProblem(
-          parametersGiven().get(0) + ": the model file holds its parameters already; leave it out");
-    }
-    if (market.hasCurve()) {
-      throw new UsageProblem("--curve: the model file holds its curve already; leave it out");
-    }
-    ModelInput read = ModelFile.read(model);
+    ModelInput read = read(market);
     if (read.measure() == ModelInput.Measure.HISTORICAL) {
       throw InputProblems.of(
           new InputProblem(
@@ -158,6 +159,18 @@ final class ModelOptions {
               "a model under the historical measure gives no prices; use one that calibrate"
                   + " wrote"));
     }
+    return read;
+  }
+
+  private ModelInput read(MarketOptions market) {
+    if (!parametersGiven().isEmpty()) {
+      throw new UsageProblem(
+          parametersGiven().get(0) + ": the model file holds its parameters already; leave it out");
+    }
+    if (market.hasCurve()) {
+      throw new UsageProblem("--curve: the model file holds its curve already; leave it out");
+    }
+    ModelInput read = ModelFile.read(model);
     if (market.asOf().isPresent() && !market.asOf().equals(read.axis().asOf())) {
       if (read.axis().asOf().isPresent()) {
         throw new UsageProblem(

@@ -28,6 +28,7 @@ class VerificationTest {
     assertThat(run("Hull-White"))
         .filteredOn(r -> !r.published().id().matches(".*(tree|3step).*"))
         .allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
+    assertThat(run("estimation")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
     assertThat(run("Black")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
     assertThat(run("convexity")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);
     assertThat(run("curves")).allMatch(r -> r.verdict() != Verdict.NOT_COMPUTED);

@@ -114,7 +114,13 @@ public record DickeyFuller(int lags, double statistic, double pValue, int observ
     return criticalValue(percent, observations);
   }
 
-  static double criticalValue(int percent, int observations) {
+  /**
+   * The statistic below which a unit root is refused.
+   *
+   * @param percent 1, 5 or 10
+   * @param observations of the regression
+   */
+  public static double criticalValue(int percent, int observations) {
     double[] surface =
         switch (percent) {
           case 1 -> AT_1;

@@ -77,7 +77,8 @@ final class EstimationCases implements ShortRateCases.Computation {
   }
 
   private static Vasicek historical(CaseInputs in) {
-    double shortRate = Double.parseDouble(in.text("r0").split(" ")[0]);
+    String today = in.text("r0"); // the rate, a blank, and where it is from
+    double shortRate = Double.parseDouble(today.substring(0, today.indexOf(' ')));
     return new Vasicek(shortRate, in.number("b_star"), in.number("a"), in.number("sigma"));
   }
 

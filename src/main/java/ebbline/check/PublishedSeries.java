@@ -14,7 +14,7 @@ final class PublishedSeries {
     return PublishedCases.text("/ebbline/published/bills-daily.txt")
         .lines()
         .filter(line -> !line.startsWith("#"))
-        .flatMap(line -> Arrays.stream(line.split(" ")))
+        .flatMap(line -> Arrays.stream(line.split(" ", -1)))
         .mapToDouble(basisPoints -> Integer.parseInt(basisPoints) / 1e4)
         .toArray();
   }

@@ -20,12 +20,11 @@ final class ShortRateCases implements CaseFamily {
           new BlackCases(),
           new CurveCases(),
           new QuotedCurveCases(),
+          new EstimationCases(),
           new NormalCases());
 
   private static final Map<String, String> LATER =
-      Map.of(
-          "estimation", "estimation from a history is not part of this version",
-          "callable", "early exercise is not part of this version");
+      Map.of("callable", "early exercise is not part of this version");
 
   @Override
   public List<CaseResult> run(List<PublishedCase> cases) {

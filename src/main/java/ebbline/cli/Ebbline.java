@@ -56,6 +56,7 @@ final class Ebbline implements Runnable {
     commands.put("price", PriceCommand::new);
     commands.put("simulate", SimulateCommand::new);
     commands.put("verify", VerifyCommand::new);
+    commands.put("challenge", ChallengeCommand::new);
     Supplier<Object> named = args.length == 0 ? null : commands.get(args[0]);
     if (named != null) {
       line.addSubcommand(args[0], named.get());

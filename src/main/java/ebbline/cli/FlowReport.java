@@ -17,11 +17,11 @@ import java.util.Locale;
 final class FlowReport {
   private FlowReport() {}
 
-  /** Adds the flows, their sum and, for a right, the value by a second method. */
+  /** Adds the flows, their sum and, for one right, the value by a second method. */
   static void explain(ResultRow.Builder result, BookRow row, Market market) {
     Claim claim = market.claim(row.instrument());
     result.rows("flows", flows(row, market));
-    if (!claim.rights().isEmpty() && market.rates().isPresent()) {
+    if (claim.rights().size() == 1 && market.rates().isPresent()) {
       Valuation second = IntegrationCheck.value(claim, market.rates().get());
       double scale = row.face() / 100;
       result.put(

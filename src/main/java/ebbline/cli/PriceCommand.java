@@ -73,8 +73,8 @@ final class PriceCommand implements Callable<Integer> {
       paramLabel = "NAME",
       defaultValue = "auto",
       description =
-          "auto (default: the most accurate that applies), closed-form, backward-induction or"
-              + " trinomial")
+          "auto (default: the most accurate that applies), closed-form, backward-induction,"
+              + " trinomial or simulation")
   private String method;
 
   @Option(
@@ -83,6 +83,8 @@ final class PriceCommand implements Callable<Integer> {
       defaultValue = "500",
       description = "steps of a trinomial tree (default 500)")
   private int steps;
+
+  @Mixin private PathsOption paths;
 
   @Option(
       names = "--explain",
@@ -109,7 +111,7 @@ final class PriceCommand implements Callable<Integer> {
     }
     CalendarRegistry calendars = holidays.calendars();
     Optional<BookFile> file = Optional.ofNullable(book).map(path -> BookFile.open(path, calendars));
-    PricingRequest request = new PricingRequest(method(), steps, horizon());
+    PricingRequest request = new PricingRequest(method(), steps, paths.sampling(output), horizon());
     List<Optional<SourceFile>> files = new ArrayList<>();
     Optional<Market> priced = market(files);
     file.ifPresent(f -> files.add(Optional.of(f.file())));
@@ -146,13 +148,17 @@ final class PriceCommand implements Callable<Integer> {
     if (method.equals("auto")) {
       return Optional.empty();
     }
-    for (Method known : List.of(Method.CLOSED_FORM, Method.BACKWARD_INDUCTION, Method.TRINOMIAL)) {
+    for (Method known :
+        List.of(
+            Method.CLOSED_FORM, Method.BACKWARD_INDUCTION, Method.TRINOMIAL, Method.SIMULATION)) {
       if (known.label().equals(method.toLowerCase(Locale.ROOT))) {
         return Optional.of(known);
       }
     }
     throw UsageProblem.of(
-        "--method", method, "expected auto, closed-form, backward-induction or trinomial");
+        "--method",
+        method,
+        "expected auto, closed-form, backward-induction, trinomial or simulation");
   }
 
   /** What rows are priced from; empty where each has its own quote only. */

@@ -24,9 +24,13 @@ final class ClaimPricer {
       return BestMethod.value(claim, rates());
     }
     Method method = request.method().get();
+    if (method == Method.SIMULATION) {
+      return Simulation.value(claim, rates(), request.sampling());
+    }
     if (!claim.optionlets().isEmpty() && method != Method.CLOSED_FORM) {
       throw new IllegalArgumentException(
-          "options on single rates are priced by closed-form, not by " + method.label());
+          "options on single rates are priced by closed-form or simulation, not by "
+              + method.label());
     }
     return switch (method) {
       case BACKWARD_INDUCTION -> BackwardInduction.value(claim, rates());

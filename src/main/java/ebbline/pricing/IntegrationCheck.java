@@ -16,6 +16,10 @@ public final class IntegrationCheck {
   private static final double REACH = 13;
   private static final double PANEL = 0.5;
   private static final int SCAN = 16;
+
+  /** More would take minutes, and no bond varies so. */
+  private static final double MOST_SHIFT = 1000;
+
   private static final GaussLegendre FINE = GaussLegendre.of(20);
   private static final GaussLegendre COARSE = GaussLegendre.of(14);
 
@@ -84,6 +88,12 @@ public final class IntegrationCheck {
       return Math.max(0, gain(0));
     }
     double shift = deviation * Arrays.stream(loadings).max().orElse(0);
+    if (!(shift <= MOST_SHIFT)) {
+      throw new IllegalArgumentException(
+          "a bond varies too much to be integrated over, by e^"
+              + (float) shift
+              + " a standard deviation of the rate");
+    }
     double low = -REACH - shift;
     int panels = (int) Math.ceil((REACH - low) / PANEL);
     double width = (REACH - low) / panels;

@@ -2,6 +2,7 @@ package ebbline.pricing;
 
 import ebbline.instrument.CashFlows;
 import ebbline.instrument.Claim;
+import ebbline.instrument.Optionlet;
 import ebbline.instrument.Right;
 import ebbline.model.GaussianRates;
 import ebbline.pricing.simulation.Sampling;
@@ -43,6 +44,9 @@ public final class Simulation {
    * @throws IllegalArgumentException if the discount factor varies too much for any number of paths
    */
   public static Valuation value(Claim claim, GaussianRates rates, Sampling sampling) {
+    if (!claim.optionlets().isEmpty()) {
+      return withOptionlets(claim, rates, sampling);
+    }
     if (claim.rights().isEmpty()) {
       Estimate flows = flows(claim.flows(), rates, sampling);
       return new Valuation(
@@ -60,6 +64,26 @@ public final class Simulation {
         flows.presentValue() + rights.middle().mean(),
         Method.SIMULATION,
         rights.middle().standardError() + rights.halfGap() + UNSEEN * size);
+  }
+
+  private static Valuation withOptionlets(Claim claim, GaussianRates rates, Sampling sampling) {
+    if (!claim.rights().isEmpty()) {
+      throw new IllegalArgumentException(
+          "options on single rates beside other rights are not simulated");
+    }
+    SimulatedOptionlets optionlets = new SimulatedOptionlets(claim.optionlets(), rates);
+    double[][] batches =
+        paths(rates, optionlets.times()).sums(sampling, 1, () -> optionlets.new Paths());
+    Estimate found = estimate(batches, 0, sampling);
+    Valuation flows = Discounting.value(claim.flows(), rates.curve());
+    double size = size(claim.flows(), rates);
+    for (Optionlet each : claim.optionlets()) {
+      size += size(each.exchanged(), rates);
+    }
+    return new Valuation(
+        flows.presentValue() + found.mean(),
+        Method.SIMULATION,
+        found.standardError() + UNSEEN * size);
   }
 
   /** Low and high estimates of a claim with rights, its flows included. */

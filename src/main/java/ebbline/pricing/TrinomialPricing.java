@@ -5,6 +5,7 @@ import ebbline.instrument.Claim;
 import ebbline.instrument.Right;
 import ebbline.instrument.Right.Party;
 import ebbline.model.GaussianRates;
+import ebbline.model.StandardNormal;
 import java.util.List;
 
 /**
@@ -20,11 +21,13 @@ public final class TrinomialPricing {
 
   private static final double ON_NODE = 1e-7;
 
+  private static final double SAFETY = 5;
+
   private TrinomialPricing() {}
 
   /**
-   * The value; its error bound is twice the larger difference to two coarser trees, an estimate:
-   * the error falls like the step and not smoothly.
+   * The value; its error bound is five times the largest difference to four coarser trees, and what
+   * lies beyond the tree's top: an estimate, since the error falls like the step and not smoothly.
    *
    * @param steps to the last decision, at least 4; a few more where that brings the decisions onto
    *     nodes
@@ -39,10 +42,34 @@ public final class TrinomialPricing {
       throw new IllegalArgumentException("a tree needs at least 4 steps, found " + steps);
     }
     double fine = rightsValue(claim, rates, steps);
-    double half = rightsValue(claim, rates, steps / 2);
-    double most = rightsValue(claim, rates, 3 * steps / 4);
-    double bound = 2 * Math.max(Math.abs(fine - half), Math.abs(fine - most));
+    double spread = 0;
+    for (int eighths = 4; eighths < 8; eighths++) {
+      double coarser = rightsValue(claim, rates, Math.max(2, steps * eighths / 8));
+      spread = Math.max(spread, Math.abs(fine - coarser));
+    }
+    double bound = SAFETY * spread + beyondReach(claim, rates, steps);
     return new Valuation(flows.presentValue() + fine, Method.TRINOMIAL, flows.errorBound() + bound);
+  }
+
+  /** The worth of the flows times the probability of rates that no node stands for. */
+  private static double beyondReach(Claim claim, GaussianRates rates, int steps) {
+    double horizon = claim.rights().get(claim.rights().size() - 1).decision();
+    double deviation = Math.sqrt(rates.variance(horizon));
+    if (!(deviation > 0)) {
+      return 0;
+    }
+    TrinomialTree tree = TrinomialTree.of(rates, horizon, steps);
+    double state = tree.rateStep() * tree.stepLength() / rates.g(tree.stepLength());
+    double size = 0;
+    for (Right right : claim.rights()) {
+      CashFlows flows = ExerciseValue.exchanged(claim, right);
+      double sum = 0;
+      for (int i = 0; i < flows.size(); i++) {
+        sum += Math.abs(flows.amount(i)) * rates.curve().discount(flows.time(i));
+      }
+      size = Math.max(size, sum);
+    }
+    return size * (1e-10 + 2 * StandardNormal.upper(tree.reach(tree.steps()) * state / deviation));
   }
 
   /** The value of the rights on one tree. */

@@ -121,8 +121,7 @@ class RowPricerTest {
   @Test
   void aMethodThatDoesNotApplyIsRefusedInTheRow() {
     PricedRow failed =
-        new RowPricer(
-                FLAT, new PricingRequest(Optional.of(Method.SIMULATION), 500, Optional.empty()))
+        new RowPricer(FLAT, new PricingRequest(Optional.of(Method.QUOTED), 500, Optional.empty()))
             .price(row(BOND, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).contains("does not price this row");

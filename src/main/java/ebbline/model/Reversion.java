@@ -81,4 +81,66 @@ final class Reversion {
   private static boolean counts(Twofold term, Twofold sum) {
     return Math.abs(term.high()) > 0x1p-80 * Math.abs(sum.high());
   }
+
+  /*
+   * Slopes in a. ∂G/∂a = −τ² m(x), m(x) = (1 − e^(−x)(1 + x))/x² = Σ_{n≥0} (−x)ⁿ/(n! (n+2)); those of the integrals
+   * are τ³ j′(x) and τ⁴ i′(x), with j′ = −((e^(−x) − g)/x + j)/x, i′ = (g² − 3i)/x, g = (1 − e^(−x))/x. Within
+   * |x| < 1 all are summed, 24 terms.
+   */
+  private static final int SLOPE_TERMS = 24;
+
+  /** ∂G(τ)/∂a. */
+  static double slopeOfG(double a, double tau) {
+    double x = a * tau;
+    double m;
+    if (Math.abs(x) < 1) {
+      m = 0;
+      double term = 1;
+      for (int n = 0; n < SLOPE_TERMS; n++) {
+        m += term / (n + 2);
+        term *= -x / (n + 1);
+      }
+    } else {
+      m = (1 - Math.exp(-x) * (1 + x)) / (x * x);
+    }
+    return -m * tau * tau;
+  }
+
+  /** ∂/∂a of ∫₀^τ G. */
+  static double slopeOfIntegral(double a, double tau) {
+    double x = a * tau;
+    double slope;
+    if (Math.abs(x) < 1) {
+      slope = 0;
+      double term = -1.0 / 6;
+      for (int k = 3; k < SLOPE_TERMS + 3; k++) {
+        slope += (k - 2) * term;
+        term *= -x / (k + 1);
+      }
+    } else {
+      double g = -Math.expm1(-x) / x;
+      slope = -((Math.exp(-x) - g) / x + (1 - g) / x) / x;
+    }
+    return slope * tau * tau * tau;
+  }
+
+  /** ∂/∂a of ∫₀^τ G². */
+  static double slopeOfSquare(double a, double tau) {
+    double x = a * tau;
+    double slope;
+    if (Math.abs(x) < 1) {
+      slope = 0;
+      double term = -1.0 / 24;
+      double two = 8;
+      for (int k = 4; k < SLOPE_TERMS + 4; k++) {
+        slope += (k - 3) * (two - 2) * term;
+        term *= -x / (k + 1);
+        two *= 2;
+      }
+    } else {
+      double g = -Math.expm1(-x) / x;
+      slope = (g * g - 3 * second(Twofold.product(a, tau)).value()) / x;
+    }
+    return slope * Math.pow(tau, 4);
+  }
 }

@@ -29,6 +29,27 @@ public record Vasicek(
   }
 
   /**
+   * Adds {@code weight} × the derivatives of ln P(0,t) in the short rate, the long-run mean, the
+   * mean reversion and the volatility, in this order.
+   *
+   * @param t years, at least 0
+   * @param gradient four entries
+   */
+  public void addLogDiscountGradient(double t, double weight, double[] gradient) {
+    double a = meanReversion;
+    double integral = Reversion.integralOfG(a, t);
+    double square = Reversion.integralOfSquare(a, t);
+    gradient[0] -= weight * Reversion.g(a, t);
+    gradient[1] -= weight * a * integral;
+    gradient[2] +=
+        weight
+            * (-longRunMean * (integral + a * Reversion.slopeOfIntegral(a, t))
+                - shortRate * Reversion.slopeOfG(a, t)
+                + 0.5 * volatility * volatility * Reversion.slopeOfSquare(a, t));
+    gradient[3] += weight * volatility * square;
+  }
+
+  /**
    * The law of the rate after {@code years}, given {@code rate} now.
    *
    * @param years at least 0

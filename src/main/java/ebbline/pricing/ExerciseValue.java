@@ -30,6 +30,7 @@ final class ExerciseValue {
 
   private double value;
   private double bound;
+  private double[] edges = {};
 
   private ExerciseValue(double[] worth, double[] shifts, double[] logs, int count) {
     this.worth = worth;
@@ -109,10 +110,38 @@ final class ExerciseValue {
       double inside = 0.5 * (Math.max(from, low) + Math.min(to, REACH));
       if (sum.logRatio(inside) > 0) {
         add(from, to);
+        edges = Arrays.copyOf(edges, edges.length + 2);
+        edges[edges.length - 2] = from;
+        edges[edges.length - 1] = to;
       }
       from = to;
     }
     value = Math.max(0, value);
+  }
+
+  /** Probability of exercise under the measure of a flow with this shift. */
+  double probability(double shift) {
+    double sum = 0;
+    for (int i = 0; i < edges.length; i += 2) {
+      sum += StandardNormal.between(edges[i] + shift, edges[i + 1] + shift);
+    }
+    return sum;
+  }
+
+  /**
+   * Its derivative in the shift at fixed boundaries; there X is 0, so they add nothing to the
+   * derivative of the value.
+   */
+  double density(double shift) {
+    double sum = 0;
+    for (int i = 0; i < edges.length; i += 2) {
+      sum += density(edges[i + 1], shift) - density(edges[i], shift);
+    }
+    return sum;
+  }
+
+  private static double density(double edge, double shift) {
+    return Double.isInfinite(edge) ? 0 : StandardNormal.density(edge + shift);
   }
 
   /** E[X; from < z < to]: each flow shifts the normal law by its b. */

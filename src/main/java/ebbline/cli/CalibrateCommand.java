@@ -40,8 +40,10 @@ import picocli.CommandLine.Option;
     description = {
       "Fits a short-rate model to today's curve (pricing measure) and writes it to a model file.",
       "vasicek: least squares on the curve's zero rates; any parameter can be held with --fix.",
-      "hull-white: --mean-reversion and --volatility are given, the drift is matched to the curve and"
-          + " the curve repriced through it as a check."
+      "hull-white: with --options FILE mean reversion and volatility are fitted to option quotes;"
+          + " without, --mean-reversion and --volatility are given, the drift is matched to the curve"
+          + " and the curve repriced through it as a check.",
+      "vasicek with --options FILE: curve and option quotes together."
     },
     footer = {
       "",
@@ -51,8 +53,7 @@ import picocli.CommandLine.Option;
       "  java -jar target/ebbline.jar calibrate --model vasicek \\",
       "    --curve curves/saltmere.csv --fix volatility=0.9%%",
       "  java -jar target/ebbline.jar calibrate --model hull-white \\",
-      "    --mean-reversion 0.05 --volatility 0.9%% --curve curves/saltmere.csv \\",
-      "    --format json"
+      "    --curve curves/saltmere.csv --options examples/option-quotes.csv"
     })
 final class CalibrateCommand implements Callable<Integer> {
   @Mixin private MarketOptions market;
@@ -62,8 +63,8 @@ final class CalibrateCommand implements Callable<Integer> {
       names = "--fix",
       paramLabel = "NAME=VALUE",
       description =
-          "vasicek: hold a parameter (short-rate, long-run-mean, mean-reversion, volatility);"
-              + " repeatable")
+          "hold a parameter (vasicek: short-rate, long-run-mean, mean-reversion, volatility;"
+              + " hull-white with --options: mean-reversion); repeatable")
   private List<String> fixed = List.of();
 
   @Option(
@@ -72,12 +73,17 @@ final class CalibrateCommand implements Callable<Integer> {
       description = "write the model to FILE, whole or not at all")
   private Path save;
 
+  @Mixin private OptionFitOptions options;
+  @Mixin private HolidayOptions holidays;
   @Mixin private OutputOptions output;
 
   @Override
   public Integer call() {
     if (!model.isGiven()) {
       throw new UsageProblem("--model is missing: vasicek or hull-white");
+    }
+    if (!options.isGiven()) {
+      options.refuseWithoutQuotes();
     }
     if (model.isNamed("vasicek")) {
       return vasicek();
@@ -95,6 +101,9 @@ final class CalibrateCommand implements Callable<Integer> {
     }
     Map<Parameter, Double> held = held();
     CurveInput input = market.curve();
+    if (options.isGiven()) {
+      return calibration(input).vasicek(held);
+    }
     FitGrid grid = FitGrid.of(input);
     Fit fit;
     try {
@@ -200,10 +209,37 @@ final class CalibrateCommand implements Callable<Integer> {
         quotes);
   }
 
+  private OptionsCalibration calibration(CurveInput input) {
+    return new OptionsCalibration(
+        input, options, holidays.calendars(), Optional.ofNullable(save), output);
+  }
+
+  private int hullWhiteToOptions() {
+    if (!model.parametersGiven().isEmpty()) {
+      String option = model.parametersGiven().get(0);
+      throw new UsageProblem(
+          option + ": the fit finds it; mean reversion can be held with --fix mean-reversion=VALUE");
+    }
+    Map<Parameter, Double> held = held();
+    OptionalDouble reversion = OptionalDouble.empty();
+    for (Map.Entry<Parameter, Double> entry : held.entrySet()) {
+      if (entry.getKey() != Parameter.MEAN_REVERSION) {
+        throw new UsageProblem(
+            "--fix: a Hull-White fit holds mean-reversion only, found " + entry.getKey().label());
+      }
+      reversion = OptionalDouble.of(entry.getValue());
+    }
+    return calibration(market.curve()).hullWhite(reversion);
+  }
+
   private int hullWhite() {
+    if (options.isGiven()) {
+      return hullWhiteToOptions();
+    }
     if (!fixed.isEmpty()) {
       throw new UsageProblem(
-          "--fix: a Hull-White model is given its parameters, --mean-reversion and --volatility");
+          "--fix: a Hull-White model is given its parameters, --mean-reversion and --volatility, or"
+              + " fitted to --options FILE");
     }
     ModelInput built = model.model(market).orElseThrow();
     HullWhite parameters = built.hullWhite().orElseThrow();

@@ -30,9 +30,26 @@ public final class VolatilityTerms {
   }
 
   private final List<Part> parts;
+  private final boolean onRates;
+  private final double most;
 
-  private VolatilityTerms(List<Part> parts) {
+  private VolatilityTerms(List<Part> parts, boolean onRates, double most) {
     this.parts = parts;
+    this.onRates = onRates;
+    this.most = most;
+  }
+
+  /**
+   * What the option can be worth at most, whatever the model: what exercise brings, and nothing of
+   * what it costs.
+   */
+  public double most() {
+    return most;
+  }
+
+  /** Whether the forward is a rate, or a price per 100. */
+  public boolean isOnRates() {
+    return onRates;
   }
 
   /**
@@ -61,7 +78,29 @@ public final class VolatilityTerms {
       throw new IllegalArgumentException(
           "a volatility is quoted for an option by itself, with one strike");
     }
-    return new VolatilityTerms(parts);
+    boolean onRates =
+        claim.rights().stream()
+            .allMatch(r -> r.strike().orElseThrow().perUnit().time(0) > r.decision());
+    return new VolatilityTerms(parts, onRates, most(claim, curve));
+  }
+
+  private static double most(Claim claim, DiscountCurve curve) {
+    double most = 0;
+    for (Right right : claim.rights()) {
+      most += gained(right.received().merged(), curve);
+    }
+    for (Optionlet each : claim.optionlets()) {
+      most += gained(each.exchanged(), curve);
+    }
+    return most;
+  }
+
+  private static double gained(CashFlows flows, DiscountCurve curve) {
+    double gained = 0;
+    for (int i = 0; i < flows.size(); i++) {
+      gained += Math.max(0, flows.amount(i)) * curve.discount(flows.time(i));
+    }
+    return gained;
   }
 
   private static Part part(Right right, DiscountCurve curve) {
@@ -180,15 +219,6 @@ public final class VolatilityTerms {
    * @throws IllegalArgumentException in words if none gives it
    */
   public double implied(VolatilityLaw law, double premium, double shift) {
-    if (parts.size() == 1) {
-      Part part = parts.get(0);
-      double price = premium / part.factor();
-      return law == VolatilityLaw.NORMAL
-          ? ImpliedVolatility.normal(
-              part.option(), part.forward(), part.strike(), part.expiry(), price)
-          : ImpliedVolatility.black(
-              part.option(), part.forward(), part.strike(), part.expiry(), price, shift);
-    }
     double least = intrinsic();
     if (!(premium >= least * (1 - 1e-15))) {
       throw new IllegalArgumentException(
@@ -197,6 +227,15 @@ public final class VolatilityTerms {
               "the premium %.9g is below the intrinsic value %.9g: no volatility gives it",
               premium,
               least));
+    }
+    if (parts.size() == 1) {
+      Part part = parts.get(0);
+      double price = premium / part.factor();
+      return law == VolatilityLaw.NORMAL
+          ? ImpliedVolatility.normal(
+              part.option(), part.forward(), part.strike(), part.expiry(), price)
+          : ImpliedVolatility.black(
+              part.option(), part.forward(), part.strike(), part.expiry(), price, shift);
     }
     return search(law, premium, shift);
   }

@@ -115,10 +115,13 @@ public final class HullWhiteCalibration {
       }
     }
     List<String> warnings = new ArrayList<>();
-    best = finished(problem, best, warnings);
-    evaluations += best.evaluations();
-    return report(
-        problem, best.point(), best.iterations(), evaluations, best.reason(), warnings);
+    MarquardtSearch.Outcome last = finished(problem, best, warnings);
+    int iterations = best.iterations();
+    if (last != best) {
+      iterations += last.iterations();
+      evaluations += last.evaluations();
+    }
+    return report(problem, last.point(), iterations, evaluations, last.reason(), warnings);
   }
 
   /** The second stage: errors of the objective itself. */
@@ -246,7 +249,7 @@ public final class HullWhiteCalibration {
     } catch (IllegalArgumentException e) {
       figure = OptionalDouble.empty();
     }
-    return new OptionFit.Quote(quote.id(), quote.unit(), quote.quoted(), figure, quote.weight());
+    return new OptionFit.Quote(quote.id(), quote.unit().label(), quote.quoted(), figure, quote.weight());
   }
 
   private double rmse(double squares) {

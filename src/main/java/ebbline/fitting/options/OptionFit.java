@@ -35,10 +35,11 @@ public record OptionFit(
   /**
    * A quote and its fit, both in the quote's own unit.
    *
+   * @param unit label of the unit of both, such as {@code normal-vol} or {@code zero-rate}
    * @param fitted absent where the model's premium has no volatility
    */
   public record Quote(
-      String id, QuoteUnit unit, double quoted, OptionalDouble fitted, double weight) {
+      String id, String unit, double quoted, OptionalDouble fitted, double weight) {
 
     /** Fitted less quoted. */
     public OptionalDouble error() {

@@ -48,6 +48,14 @@ public record OptionQuote(
       throw new IllegalArgumentException(
           "a quote needs time to its expiry, found " + terms.expiry() + " years");
     }
+    if (!(premium < terms.most())) {
+      throw new IllegalArgumentException(
+          String.format(
+              Locale.ROOT,
+              "a premium of %.9g is not below %.9g, the most the option can be worth",
+              premium,
+              terms.most()));
+    }
     if (!(terms.implied(ebbline.pricing.VolatilityLaw.NORMAL, premium, 0) > 0)) {
       throw new IllegalArgumentException(
           String.format(

@@ -218,7 +218,8 @@ final class CalibrateCommand implements Callable<Integer> {
     if (!model.parametersGiven().isEmpty()) {
       String option = model.parametersGiven().get(0);
       throw new UsageProblem(
-          option + ": the fit finds it; mean reversion can be held with --fix mean-reversion=VALUE");
+          option
+              + ": the fit finds it; mean reversion can be held with --fix mean-reversion=VALUE");
     }
     Map<Parameter, Double> held = held();
     OptionalDouble reversion = OptionalDouble.empty();

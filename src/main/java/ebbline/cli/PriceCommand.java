@@ -168,6 +168,7 @@ final class PriceCommand implements Callable<Integer> {
     if (named.isPresent()) {
       files.add(named.get().file());
       found = Market.of(named.get().axis(), named.get().rates());
+      found = named.get().fitted().map(found::withFitted).orElse(found);
     } else if (market.hasCurve()) {
       CurveInput curve = market.curve();
       files.add(curve.file());

@@ -4,7 +4,9 @@ import ebbline.curve.DiscountCurve;
 import ebbline.model.GaussianRates;
 import ebbline.model.HullWhite;
 import ebbline.model.Vasicek;
+import ebbline.pricing.FittedParameters;
 import ebbline.time.TimeAxis;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
@@ -78,5 +80,14 @@ public record ModelInput(
     return vasicek.isPresent()
         ? vasicek.get().rates()
         : hullWhite.orElseThrow().on(curve.orElseThrow());
+  }
+
+  /** How sure the parameters are, where the file says; its covariance may be empty. */
+  public Optional<FittedParameters> fitted() {
+    return fit.filter(f -> !f.covariance().isEmpty())
+        .map(
+            f ->
+                new FittedParameters(
+                    List.copyOf(f.standardErrors().keySet()), f.covariance(), vasicek));
   }
 }

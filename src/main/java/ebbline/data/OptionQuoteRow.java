@@ -12,7 +12,7 @@ import ebbline.time.Moment;
 import ebbline.time.Tenor;
 import ebbline.time.TimeAxis;
 import java.time.LocalDate;
-import java.time.Period;
+import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -99,8 +99,7 @@ final class OptionQuoteRow {
 
   private boolean isBeyondTheCurve(CsvRow row, VolatilityTerms terms) {
     double[] nodes = market.curve().nodes();
-    if (nodes.length == 0
-        || terms.lastExpiry() <= nodes[nodes.length - 1] + TimeAxis.SAME_MOMENT) {
+    if (nodes.length == 0 || terms.lastExpiry() <= nodes[nodes.length - 1] + TimeAxis.SAME_MOMENT) {
       return false;
     }
     String column = row.has("expiry") ? "expiry" : "maturity";
@@ -183,11 +182,12 @@ final class OptionQuoteRow {
     TimeAxis axis = market.axis();
     if (axis.isDated(start) && axis.isDated(end)) {
       LocalDate from = axis.date(start);
-      Period period = Period.between(from, axis.date(end));
-      return period.isNegative() || period.isZero()
-          ? Optional.empty()
-          : Optional.of(
-              new Tenor((int) period.toTotalMonths(), period.getDays()).toString());
+      LocalDate to = axis.date(end);
+      long months = ChronoUnit.MONTHS.between(from, to);
+      long days = ChronoUnit.DAYS.between(from.plusMonths(months), to);
+      return from.isBefore(to)
+          ? Optional.of(new Tenor((int) months, (int) days).toString())
+          : Optional.empty();
     }
     if (start instanceof Moment.OnDate || end instanceof Moment.OnDate) {
       return Optional.empty();

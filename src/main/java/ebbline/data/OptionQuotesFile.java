@@ -66,7 +66,8 @@ public final class OptionQuotesFile {
     for (String column : List.of("instrument", "quote")) {
       if (!table.hasColumn(column)) {
         problems.add(
-            table.headerProblem(column, "the column is missing; a sheet of option quotes needs it"));
+            table.headerProblem(
+                column, "the column is missing; a sheet of option quotes needs it"));
       }
     }
     Map<String, String> defaults = defaults(new SettingReader(table, problems), calendars);
@@ -86,7 +87,9 @@ public final class OptionQuotesFile {
                 Integer line = lines.put(q.id(), row.line());
                 if (line != null) {
                   row.problem(
-                      "id", q.id(), "the same quote, or its label, stands in line " + line + " too");
+                      "id",
+                      q.id(),
+                      "the same quote, or its label, stands in line " + line + " too");
                 }
                 quotes.add(q);
                 expiries.add(row.text("expiry").orElse(""));

@@ -103,6 +103,20 @@ public final class CashFlows {
     return new CashFlows(t, a);
   }
 
+  /** Flows in any order of time, put into it; those at one time keep theirs. */
+  public static CashFlows sorted(double[] times, double[] amounts) {
+    Integer[] order = new Integer[times.length];
+    Arrays.setAll(order, i -> i);
+    Arrays.sort(order, (i, j) -> Double.compare(times[i], times[j]));
+    double[] t = new double[order.length];
+    double[] a = new double[order.length];
+    for (int i = 0; i < order.length; i++) {
+      t[i] = times[order[i]];
+      a[i] = amounts[order[i]];
+    }
+    return of(t, a);
+  }
+
   /** Flows at one time added up; those that cancel to nothing are left out. */
   public CashFlows merged() {
     double[] t = new double[size()];

@@ -66,11 +66,15 @@ public record Swaption(
     BondTerms terms =
         new BondTerms(
             end, frequency, 100, conventions, OddPeriods.from(start), 0, ExDividend.never());
-    CashFlows perUnit = CashFlows.NONE;
-    List<FloatingCoupon> floating = new ArrayList<>();
     int sign = side.sign();
-    for (LegPeriod period : LegPeriods.of(terms, axis)) {
-      perUnit = perUnit.plus(CashFlows.single(period.payment(), sign * 100 * period.years()));
+    List<LegPeriod> periods = LegPeriods.of(terms, axis);
+    double[] times = new double[periods.size()];
+    double[] coupons = new double[times.length];
+    List<FloatingCoupon> floating = new ArrayList<>();
+    for (int i = 0; i < times.length; i++) {
+      LegPeriod period = periods.get(i);
+      times[i] = period.payment();
+      coupons[i] = sign * 100 * period.years();
       floating.add(
           new FloatingCoupon(
               Math.max(exercise, period.start()),
@@ -80,6 +84,7 @@ public record Swaption(
               0,
               0));
     }
+    CashFlows perUnit = CashFlows.of(times, coupons);
     CashFlows fixed = strike.isPresent() ? perUnit.times(strike.getAsDouble()) : CashFlows.NONE;
     Right right =
         new Right(

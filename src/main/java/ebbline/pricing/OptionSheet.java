@@ -247,8 +247,7 @@ public final class OptionSheet {
     }
     int right = -at - 1;
     boolean left =
-        right == sorted.length
-            || (right > 0 && value - sorted[right - 1] <= sorted[right] - value);
+        right == sorted.length || (right > 0 && value - sorted[right - 1] <= sorted[right] - value);
     return left ? right - 1 : right;
   }
 
@@ -275,8 +274,7 @@ public final class OptionSheet {
     void add(int quote, Claim claim, DiscountCurve curve) {
       boolean simple = claim.flows().isEmpty();
       for (Right right : claim.rights()) {
-        simple &=
-            right.party() == Right.Party.HOLDER && hasOneBoundary(right.received().merged());
+        simple &= right.party() == Right.Party.HOLDER && hasOneBoundary(right.received().merged());
         simple &= startsAt(right.received().merged(), right.decision());
       }
       for (Optionlet each : claim.optionlets()) {

@@ -74,18 +74,22 @@ final class Projection {
     if (right.isFixed()) {
       return right;
     }
-    CashFlows all = right.known();
-    for (FloatingCoupon coupon : right.floating()) {
+    int n = right.floating().size();
+    double[] times = new double[3 * n];
+    double[] amounts = new double[3 * n];
+    for (int i = 0; i < n; i++) {
+      FloatingCoupon coupon = right.floating().get(i);
       double later =
           Math.exp(discount.logDiscount(coupon.payment()) - discount.logDiscount(coupon.end()));
       double notional = coupon.notional() * later;
-      all =
-          all.plus(
-                  CashFlows.single(
-                      coupon.start(), notional * growthOver(coupon.start(), coupon.end())))
-              .plus(CashFlows.single(coupon.end(), -notional))
-              .plus(CashFlows.single(coupon.payment(), coupon.margin()));
+      times[i] = coupon.start();
+      amounts[i] = notional * growthOver(coupon.start(), coupon.end());
+      times[n + i] = coupon.end();
+      amounts[n + i] = -notional;
+      times[2 * n + i] = coupon.payment();
+      amounts[2 * n + i] = coupon.margin();
     }
+    CashFlows all = right.known().plus(CashFlows.sorted(times, amounts));
     Optional<StrikeTerms> strike = right.strike();
     if (strike.isPresent() && strike.get().value().isEmpty()) {
       CashFlows perUnit = strike.get().perUnit();

@@ -34,6 +34,10 @@ public final class RowPricer implements BookPricer {
     double scale = row.face() / 100;
     figures.put(PriceFigure.PRESENT_VALUE, value.presentValue() * scale);
     figures.put(PriceFigure.ERROR_BOUND, value.errorBound() * Math.abs(scale));
+    if (market.fitted().isPresent()) {
+      double deviation = market.fitted().get().deviation(row.instrument(), claim, market);
+      figures.put(PriceFigure.PARAMETER_SD, deviation * Math.abs(scale));
+    }
     String message = "";
     if (row.instrument() instanceof Swap swap) {
       figures.put(PriceFigure.PAR_RATE, ParRate.of(swap, market));

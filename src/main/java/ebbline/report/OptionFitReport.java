@@ -54,8 +54,7 @@ public final class OptionFitReport {
       boolean worse =
           quote.error().isPresent()
               && (worst == null
-                  || Math.abs(quote.error().getAsDouble())
-                      > Math.abs(worst.error().orElseThrow()));
+                  || Math.abs(quote.error().getAsDouble()) > Math.abs(worst.error().orElseThrow()));
       worst = worse ? quote : worst;
     }
     return Optional.ofNullable(worst);

@@ -2,6 +2,7 @@ package ebbline.data;
 
 import static org.assertj.core.api.Assertions.fail;
 
+import ebbline.pricing.Market;
 import ebbline.time.CalendarRegistry;
 import ebbline.time.InputProblems;
 import java.io.IOException;
@@ -91,6 +92,21 @@ class MutatedInputTest {
         Files.readAllBytes(Path.of("examples", "book.csv")),
         3,
         f -> BookFile.open(f, CalendarRegistry.standard()).forEach(entry -> {}));
+  }
+
+  @Test
+  void optionQuotesSurvive() throws IOException {
+    CurveInput curve = CurveFile.read("curves/saltmere.csv", Optional.empty(), Optional.empty());
+    Market market = Market.of(curve.axis(), curve.curve());
+    check(
+        Files.readAllBytes(Path.of("examples", "option-quotes.csv")),
+        11,
+        f -> OptionQuotesFile.read(f, market, CalendarRegistry.standard()));
+    check(
+        Files.readAllBytes(
+            Path.of("src", "test", "resources", "golden", "files", "option-kinds.csv")),
+        12,
+        f -> OptionQuotesFile.read(f, market, CalendarRegistry.standard()));
   }
 
   @Test

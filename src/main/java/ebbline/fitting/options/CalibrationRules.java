@@ -74,10 +74,7 @@ final class CalibrationRules {
   }
 
   private static String years(double value) {
-    return new BigDecimal(value)
-        .round(new MathContext(6))
-        .stripTrailingZeros()
-        .toPlainString();
+    return new BigDecimal(value).round(new MathContext(6)).stripTrailingZeros().toPlainString();
   }
 
   static int counted(List<OptionQuote> quotes) {

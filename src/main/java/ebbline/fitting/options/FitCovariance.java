@@ -84,9 +84,7 @@ public final class FitCovariance {
 
   public OptionalDouble standardError(int parameter) {
     OptionalDouble variance = covariance(parameter, parameter);
-    return variance.isPresent()
-        ? OptionalDouble.of(Math.sqrt(variance.getAsDouble()))
-        : variance;
+    return variance.isPresent() ? OptionalDouble.of(Math.sqrt(variance.getAsDouble())) : variance;
   }
 
   /** Between −1 and 1; there even where the fit is exact. */

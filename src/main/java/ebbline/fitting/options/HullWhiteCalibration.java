@@ -7,6 +7,7 @@ import ebbline.pricing.OptionSheet;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
@@ -62,8 +63,7 @@ public final class HullWhiteCalibration {
     for (int k = 0; k < sigma.length; k++) {
       sigma[k] = fit.value(CalibrationRules.volatilityName(terms, k));
     }
-    return new HullWhite(
-        fit.value("mean_reversion"), VolatilitySteps.of(terms.stepEnds(), sigma));
+    return new HullWhite(fit.value("mean_reversion"), VolatilitySteps.of(terms.stepEnds(), sigma));
   }
 
   public OptionFit fit() {
@@ -115,32 +115,34 @@ public final class HullWhiteCalibration {
       }
     }
     List<String> warnings = new ArrayList<>();
-    MarquardtSearch.Outcome last = finished(problem, best, warnings);
-    int iterations = best.iterations();
-    if (last != best) {
-      iterations += last.iterations();
-      evaluations += last.evaluations();
-    }
-    return report(problem, last.point(), iterations, evaluations, last.reason(), warnings);
+    Optional<MarquardtSearch.Outcome> second = finished(problem, best, warnings);
+    MarquardtSearch.Outcome last = second.orElse(best);
+    return report(
+        problem,
+        last.point(),
+        best.iterations() + second.map(MarquardtSearch.Outcome::iterations).orElse(0),
+        evaluations + second.map(MarquardtSearch.Outcome::evaluations).orElse(0),
+        last.reason(),
+        warnings);
   }
 
-  /** The second stage: errors of the objective itself. */
-  private MarquardtSearch.Outcome finished(
+  /** The second stage: errors of the objective itself; empty where the first is the end. */
+  private Optional<MarquardtSearch.Outcome> finished(
       HullWhiteProblem problem, MarquardtSearch.Outcome first, List<String> warnings) {
     if (targets.isLinear() || Math.sqrt(first.squares() / targets.size()) < EXACT) {
-      return first;
+      return Optional.empty();
     }
     problem.setExact(true);
     MarquardtSearch.Outcome second =
         MarquardtSearch.minimise(problem, first.point(), terms.iterations());
     if (second.squares() < Double.POSITIVE_INFINITY) {
-      return second;
+      return Optional.of(second);
     }
     problem.setExact(false);
     warnings.add(
         "the model's premium of some quote has no volatility: errors are premium errors over the"
             + " quote's vega");
-    return first;
+    return Optional.empty();
   }
 
   private OptionFit bootstrapped() {
@@ -160,8 +162,7 @@ public final class HullWhiteCalibration {
               .filter(q -> q.terms().lastExpiry() > from + CalibrationRules.SAME)
               .filter(q -> q.terms().lastExpiry() <= to + CalibrationRules.SAME)
               .toList();
-      OptionSheet part =
-          OptionSheet.of(inside.stream().map(OptionQuote::claim).toList(), curve);
+      OptionSheet part = OptionSheet.of(inside.stream().map(OptionQuote::claim).toList(), curve);
       HullWhiteProblem problem =
           new HullWhiteProblem(
               part,
@@ -175,7 +176,7 @@ public final class HullWhiteCalibration {
       MarquardtSearch.Outcome outcome =
           MarquardtSearch.minimise(
               problem, problem.coordinates(reversion, sigma), terms.iterations());
-      outcome = finished(problem, outcome, warnings);
+      outcome = finished(problem, outcome, warnings).orElse(outcome);
       sigma = problem.volatility(outcome.point());
       evaluations += outcome.evaluations();
       iterations += outcome.iterations();
@@ -244,12 +245,12 @@ public final class HullWhiteCalibration {
   static OptionFit.Quote fitted(OptionQuote quote, double premium) {
     OptionalDouble figure;
     try {
-      figure =
-          OptionalDouble.of(quote.unit().figure(quote.terms(), premium, quote.shift()));
+      figure = OptionalDouble.of(quote.unit().figure(quote.terms(), premium, quote.shift()));
     } catch (IllegalArgumentException e) {
       figure = OptionalDouble.empty();
     }
-    return new OptionFit.Quote(quote.id(), quote.unit().label(), quote.quoted(), figure, quote.weight());
+    return new OptionFit.Quote(
+        quote.id(), quote.unit().label(), quote.quoted(), figure, quote.weight());
   }
 
   private double rmse(double squares) {

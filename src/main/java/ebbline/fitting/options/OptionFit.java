@@ -38,8 +38,7 @@ public record OptionFit(
    * @param unit label of the unit of both, such as {@code normal-vol} or {@code zero-rate}
    * @param fitted absent where the model's premium has no volatility
    */
-  public record Quote(
-      String id, String unit, double quoted, OptionalDouble fitted, double weight) {
+  public record Quote(String id, String unit, double quoted, OptionalDouble fitted, double weight) {
 
     /** Fitted less quoted. */
     public OptionalDouble error() {

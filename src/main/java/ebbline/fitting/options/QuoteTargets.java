@@ -6,8 +6,8 @@ import java.util.List;
  * Weighted errors of model premiums against quotes in the unit of the objective.
  *
  * <p>Two measures of the same error: premium error over the quote's vega, which costs nothing, and
- * the difference of the volatilities themselves. They agree to first order; a search takes the first
- * to come near and the second to end.
+ * the difference of the volatilities themselves. They agree to first order; a search takes the
+ * first to come near and the second to end.
  */
 final class QuoteTargets {
   private final List<OptionQuote> quotes;
@@ -84,8 +84,7 @@ final class QuoteTargets {
 
   private double implied(int i, double value) {
     try {
-      double implied =
-          objective.unit().figure(quotes.get(i).terms(), value, quotes.get(i).shift());
+      double implied = objective.unit().figure(quotes.get(i).terms(), value, quotes.get(i).shift());
       return implied > 0 ? implied : Double.NaN;
     } catch (IllegalArgumentException e) {
       return Double.NaN;

@@ -63,8 +63,7 @@ public final class VasicekJointFit {
       best = best == null || outcome.squares() < best.squares() ? outcome : best;
     }
     problem.setExact(true);
-    MarquardtSearch.Outcome second =
-        MarquardtSearch.minimise(problem, best.point(), iterations);
+    MarquardtSearch.Outcome second = MarquardtSearch.minimise(problem, best.point(), iterations);
     List<String> warnings = new ArrayList<>();
     if (second.squares() < Double.POSITIVE_INFINITY) {
       best = second;
@@ -105,8 +104,7 @@ public final class VasicekJointFit {
       List<String> warnings) {
     Vasicek model = problem.model(best.point());
     double[][] slopes = problem.naturalSlopes(best.point());
-    FitCovariance covariance =
-        FitCovariance.of(slopes, best.squares(), problem.counted());
+    FitCovariance covariance = FitCovariance.of(slopes, best.squares(), problem.counted());
     List<OptionFit.Quote> quotes = new ArrayList<>();
     double[] rates = problem.zeroRates();
     for (int i = 0; i < rates.length; i++) {
@@ -138,8 +136,7 @@ public final class VasicekJointFit {
     double weights = rates.length + problem.weights();
     return new OptionFit(
         Arrays.stream(Parameter.values()).map(Parameter::label).toList(),
-        List.of(
-            model.meanReversion(), model.longRunMean(), model.volatility(), model.shortRate()),
+        List.of(model.meanReversion(), model.longRunMean(), model.volatility(), model.shortRate()),
         problem.free().stream().map(Parameter::label).toList(),
         covariance,
         quotes,

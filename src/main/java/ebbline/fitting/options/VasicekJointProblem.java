@@ -11,8 +11,8 @@ import java.util.Map;
 
 /**
  * Errors of zero rates, then of option quotes, as a function of free coordinates without bounds:
- * mean reversion and volatility as in {@link HullWhiteProblem}, and the drift b = κ(θ − r₀) in place
- * of a free θ, which is smooth where κ is 0.
+ * mean reversion and volatility as in {@link HullWhiteProblem}, and the drift b = κ(θ − r₀) in
+ * place of a free θ, which is smooth where κ is 0.
  */
 final class VasicekJointProblem implements MarquardtSearch.Problem {
   private static final double LOWEST_REVERSION = -0.5;
@@ -118,8 +118,7 @@ final class VasicekJointProblem implements MarquardtSearch.Problem {
       point[j] =
           switch (free.get(j)) {
             case MEAN_REVERSION -> asin((model.meanReversion() - MIDDLE) / HALF);
-            case LONG_RUN_MEAN ->
-                model.meanReversion() * (model.longRunMean() - model.shortRate());
+            case LONG_RUN_MEAN -> model.meanReversion() * (model.longRunMean() - model.shortRate());
             case VOLATILITY ->
                 asin(
                     (Math.log(Math.max(CalibrationTerms.LOWEST_VOLATILITY, model.volatility()))
@@ -180,10 +179,8 @@ final class VasicekJointProblem implements MarquardtSearch.Problem {
               case MEAN_REVERSION ->
                   (slopes[REVERSION][i] + gap * slopes[DRIFT][i]) * HALF * Math.cos(point[j]);
               case LONG_RUN_MEAN -> slopes[DRIFT][i];
-              case VOLATILITY ->
-                  slopes[VOLATILITY][i] * sigma * HALF_LOG * Math.cos(point[j]);
-              case SHORT_RATE ->
-                  slopes[RATE][i] - (meanHeld ? reversion * slopes[DRIFT][i] : 0);
+              case VOLATILITY -> slopes[VOLATILITY][i] * sigma * HALF_LOG * Math.cos(point[j]);
+              case SHORT_RATE -> slopes[RATE][i] - (meanHeld ? reversion * slopes[DRIFT][i] : 0);
             };
       }
     }

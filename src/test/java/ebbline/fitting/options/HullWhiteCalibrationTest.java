@@ -15,8 +15,7 @@ import org.junit.jupiter.api.Test;
 
 class HullWhiteCalibrationTest {
   private static final CalibrationTerms TERMS = CalibrationTerms.standard(Objective.NORMAL);
-  private static final HullWhite TRUTH =
-      new HullWhite(0.045, VolatilitySteps.constant(0.0085));
+  private static final HullWhite TRUTH = new HullWhite(0.045, VolatilitySteps.constant(0.0085));
 
   private static OptionFit fit(List<OptionQuote> quotes, CalibrationTerms terms) {
     return HullWhiteCalibration.of(quotes, Sheets.CURVE, terms).fit();
@@ -77,8 +76,7 @@ class HullWhiteCalibrationTest {
   /** The slopes that the search uses against central differences of the errors. */
   @Test
   void theJacobianIsTheSlopeOfTheErrors() {
-    List<OptionQuote> quotes =
-        Sheets.noisy(Sheets.swaptions(TRUTH), 5e-5, new SplittableRandom(3));
+    List<OptionQuote> quotes = Sheets.noisy(Sheets.swaptions(TRUTH), 5e-5, new SplittableRandom(3));
     double[] ends = {3};
     for (Objective objective : Objective.values()) {
       CalibrationTerms terms = CalibrationTerms.standard(objective).withSteps(ends, false);
@@ -180,8 +178,7 @@ class HullWhiteCalibrationTest {
             first.id(), first.claim(), first.terms(), first.unit(), 2 * first.quoted(), 0, 0));
     OptionFit fit = fit(all, TERMS);
     assertThat(fit.value("mean_reversion")).isCloseTo(0.045, within(1e-9));
-    assertThat(fit.quotes().get(0).error().orElseThrow())
-        .isCloseTo(-first.quoted(), within(1e-10));
+    assertThat(fit.quotes().get(0).error().orElseThrow()).isCloseTo(-first.quoted(), within(1e-10));
     assertThat(fit.rmse()).isLessThan(1e-12);
   }
 
@@ -206,9 +203,7 @@ class HullWhiteCalibrationTest {
         .isCloseTo(0.0085, within(1e-11));
     List<OptionQuote> weightless =
         all.stream()
-            .map(
-                q ->
-                    new OptionQuote(q.id(), q.claim(), q.terms(), q.unit(), q.quoted(), 0, 0))
+            .map(q -> new OptionQuote(q.id(), q.claim(), q.terms(), q.unit(), q.quoted(), 0, 0))
             .toList();
     assertThatThrownBy(() -> fit(weightless, TERMS)).hasMessageContaining("all weights 0");
     assertThatThrownBy(() -> fit(all.subList(0, 1), TERMS)).hasMessageContaining("2 parameters");

@@ -31,8 +31,7 @@ final class Sheets {
   private Sheets() {}
 
   static Swaption swaption(int expiry, int tenor, OptionalDouble strike) {
-    return Swaption.of(
-        SwapSide.PAYER, Moment.ofYears(expiry), Tenor.parse(tenor + "Y"), 2, strike);
+    return Swaption.of(SwapSide.PAYER, Moment.ofYears(expiry), Tenor.parse(tenor + "Y"), 2, strike);
   }
 
   static Claim claim(Swaption swaption) {
@@ -47,8 +46,7 @@ final class Sheets {
       for (int tenor = 1; tenor <= 10; tenor++) {
         Claim claim = claim(swaption(expiry, tenor, OptionalDouble.empty()));
         double premium = ClosedForm.value(claim, rates).presentValue();
-        double vol =
-            VolatilityTerms.of(claim, CURVE).implied(VolatilityLaw.NORMAL, premium, 0);
+        double vol = VolatilityTerms.of(claim, CURVE).implied(VolatilityLaw.NORMAL, premium, 0);
         quotes.add(
             OptionQuote.of(
                 expiry + "Yx" + tenor + "Y", claim, CURVE, QuoteUnit.NORMAL_VOL, vol, 0, 1));

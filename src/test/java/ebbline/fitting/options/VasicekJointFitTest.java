@@ -136,13 +136,7 @@ class VasicekJointFitTest {
     assertThatThrownBy(
             () ->
                 VasicekJointFit.fit(
-                    TIMES,
-                    zeros(TRUTH),
-                    LABELS,
-                    quotes(TRUTH),
-                    Map.of(),
-                    Objective.PREMIUM,
-                    100))
+                    TIMES, zeros(TRUTH), LABELS, quotes(TRUTH), Map.of(), Objective.PREMIUM, 100))
         .hasMessageContaining("no unit in common");
     assertThatThrownBy(
             () ->

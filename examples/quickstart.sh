@@ -1,6 +1,7 @@
 #!/bin/sh
 # Builds what is missing and runs the main job on the demo files: today's curve of the (invented) Saltmere Harbour Trust,
-# both models fitted to it, its book priced, and the published examples reproduced. Works from any folder.
+# read and built from quotes; the models estimated from history and fitted to curve and options; its books priced; and the
+# published examples reproduced. Works from any folder.
 set -eu
 cd "$(dirname "$0")/.."
 
@@ -18,6 +19,14 @@ echo "== The curve"
 ebbline curve --curve curves/saltmere.csv
 
 echo
+echo "== A curve built from market quotes"
+ebbline curve --quotes curves/saltmere-quotes.csv --save "$models/built.csv"
+
+echo
+echo "== A rate history: Vasicek under the historical measure"
+ebbline estimate examples/saltmere-rates.csv --replications 499
+
+echo
 echo "== Vasicek fitted to it (the volatility is held: a curve alone hardly shows it)"
 ebbline calibrate --model vasicek --curve curves/saltmere.csv --fix volatility=0.9% --save "$models/vasicek.json"
 
@@ -31,7 +40,16 @@ echo "== The book under Hull-White"
 ebbline price --model "$models/hull-white.json" --book examples/book.csv
 
 echo
-echo "== The same book under Vasicek"
+echo "== Hull-White fitted to quotes of swaptions"
+ebbline calibrate --model hull-white --curve curves/saltmere.csv --options examples/option-quotes.csv \
+  --save "$models/fitted.json"
+
+echo
+echo "== Callable, putable and Bermudan rows under it"
+ebbline price --model "$models/fitted.json" --book examples/callables.csv
+
+echo
+echo "== The book under Vasicek"
 ebbline price --model "$models/vasicek.json" --book examples/book.csv
 
 echo

@@ -27,8 +27,11 @@ import java.util.OptionalDouble;
 
 /** One rate's history, from the estimate to all that is said about it. */
 final class HistoryEstimation {
-  /** Evaluations of the likelihood that the search on uneven steps takes, about. */
-  private static final double SEARCH = 120;
+  /**
+   * Work of a search over the likelihood for each length of step, in simulated rates, about: a
+   * hundred evaluations.
+   */
+  private static final double SEARCH = 1000;
 
   private final EstimateOptions options;
   private final OutputOptions output;
@@ -81,7 +84,8 @@ final class HistoryEstimation {
 
   private Resampling resampling(RateHistory history, HistoryMethod method) {
     boolean line = method == HistoryMethod.OLS || method == HistoryMethod.EXACT;
-    double cost = Math.max(1, history.size()) * (history.isRegular() && line ? 1 : SEARCH);
+    double search = history.isRegular() && line ? 0 : SEARCH * history.distinctSteps();
+    double cost = Math.max(1, history.size()) + search;
     return options.resampling(cost, output.seed());
   }
 

@@ -116,4 +116,21 @@ class MutatedInputTest {
         4,
         ModelFile::read);
   }
+
+  @Test
+  void historiesSurvive() throws IOException {
+    byte[] dated = Files.readAllBytes(Path.of("examples", "saltmere-rates.csv"));
+    check(
+        Arrays.copyOf(dated, 900), 5, f -> HistoryFile.read(f, Optional.empty(), Optional.empty()));
+    byte[] bare =
+        "# step: 1/250\nrate_pct,other\n3.1,4\n\"\",5\n-0.25,6\n3.4,7\n"
+            .getBytes(StandardCharsets.UTF_8);
+    check(bare, 6, f -> HistoryFile.read(f, Optional.empty(), Optional.of("rate_pct")));
+  }
+
+  @Test
+  void panelsSurvive() throws IOException {
+    byte[] panel = Files.readAllBytes(Path.of("examples", "saltmere-panel.csv"));
+    check(Arrays.copyOf(panel, 1200), 7, f -> PanelFile.read(f, Optional.empty()));
+  }
 }

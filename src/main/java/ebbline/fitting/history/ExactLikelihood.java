@@ -12,8 +12,7 @@ final class ExactLikelihood {
   private final double[] steps;
   private final boolean stationary;
 
-  /** Sums that replace the passes over even steps; null on uneven ones. */
-  private final LaggedSums even;
+  private final StepSums[] sums;
 
   /** The point last evaluated. */
   double meanReversion;
@@ -33,7 +32,7 @@ final class ExactLikelihood {
     this.x = history.ratesInPlace();
     this.stationary = stationary;
     this.steps = new double[x.length - 1];
-    this.even = history.isRegular() ? LaggedSums.of(x) : null;
+    this.sums = StepSums.of(history);
     for (int i = 0; i < steps.length; i++) {
       steps[i] = history.isRegular() ? history.step() : history.time(i + 1) - history.time(i);
     }
@@ -47,96 +46,46 @@ final class ExactLikelihood {
   /** Evaluates the profile at κ. */
   void at(double kappa) {
     meanReversion = kappa;
-    if (even != null) {
-      atEven(kappa);
-      return;
-    }
     // Residual of a step: e = δ + κ gΔ x − m gΔ with variance w = Δ g(2κΔ), g as in Decay; x is
-    // measured from the first rate, so that the drift is the one there.
-    double origin = x[0];
+    // measured from the first rate, so that the drift is the one there. With the stationary law
+    // (x₀ − θ)² 2κ = 2m²/κ.
+    double first = stationary ? 2 / kappa : 0;
     double num = 0;
-    double den = 0;
-    if (stationary) {
-      // (x₀ − θ)² 2κ = 2m²/κ.
-      den += 2 / kappa;
-    }
-    double last = -1;
-    double reach = 0;
-    double width = 0;
-    for (int i = 0; i < steps.length; i++) {
-      double step = steps[i];
-      if (step != last) {
-        reach = Decay.at(kappa * step).g * step;
-        width = Decay.at(2 * kappa * step).g * step;
-        last = step;
-      }
-      double gap = x[i + 1] - x[i] + kappa * reach * (x[i] - origin);
-      num += gap * reach / width;
-      den += reach * reach / width;
+    double den = first;
+    for (StepSums group : sums) {
+      double reach = Decay.at(kappa * group.step).g * group.step;
+      double width = Decay.at(2 * kappa * group.step).g * group.step;
+      double gap = group.meanChange + kappa * reach * group.mean;
+      num += group.n * gap * reach / width;
+      den += group.n * reach * reach / width;
     }
     double m = num / den;
-    double squares = stationary ? 2 * m * m / kappa : 0;
+    double squares = first * m * m;
     double logs = stationary ? -Math.log(2 * kappa) : 0;
     double logsSlope = stationary ? -1 / kappa : 0;
     // At the best drift the slope is the same whether θ or m is held; with m nothing divides by κ.
     double squaresSlope = stationary ? -2 * m * m / (kappa * kappa) : 0;
-    last = -1;
-    double reachSlope = 0;
-    double widthSlope = 0;
-    double logWidth = 0;
-    for (int i = 0; i < steps.length; i++) {
-      double step = steps[i];
-      if (step != last) {
-        Decay one = Decay.at(kappa * step);
-        Decay two = Decay.at(2 * kappa * step);
-        reach = one.g * step;
-        reachSlope = one.slope * step * step;
-        width = two.g * step;
-        widthSlope = 2 * two.slope * step * step;
-        logWidth = Math.log(width);
-        last = step;
-      }
-      double d = x[i] - origin;
-      double e = x[i + 1] - x[i] + kappa * reach * d - m * reach;
-      double eSlope = (reach + kappa * reachSlope) * d - m * reachSlope;
-      squares += e * e / width;
-      squaresSlope += (2 * e * eSlope - e * e * widthSlope / width) / width;
-      logs += logWidth;
-      logsSlope += widthSlope / width;
+    for (StepSums group : sums) {
+      double step = group.step;
+      int n = group.n;
+      Decay one = Decay.at(kappa * step);
+      Decay two = Decay.at(2 * kappa * step);
+      double reach = one.g * step;
+      double reachSlope = one.slope * step * step;
+      double width = two.g * step;
+      double widthSlope = 2 * two.slope * step * step;
+      double pull = kappa * reach;
+      double pullSlope = reach + kappa * reachSlope;
+      double off = group.meanChange + pull * group.mean - m * reach;
+      double offSlope = pullSlope * group.mean - m * reachSlope;
+      double sum = group.squares(pull) + n * off * off;
+      double sumSlope =
+          2 * pullSlope * (group.cross + pull * group.square) + 2 * n * off * offSlope;
+      squares += sum / width;
+      squaresSlope += (sumSlope - sum * widthSlope / width) / width;
+      logs += n * Math.log(width);
+      logsSlope += n * widthSlope / width;
     }
-    int n = terms();
-    driftAtFirst = m;
-    variance = squares / n;
-    logLikelihood = -0.5 * (n * (Math.log(2 * Math.PI * variance) + 1) + logs);
-    slope = -0.5 * (squaresSlope / variance + logsSlope);
-  }
-
-  /** The same for even steps from the sums: all residuals are δ + κ gΔ x − m gΔ. */
-  private void atEven(double kappa) {
-    double step = steps[0];
-    int n = even.n;
-    Decay one = Decay.at(kappa * step);
-    Decay two = Decay.at(2 * kappa * step);
-    double reach = one.g * step;
-    double reachSlope = one.slope * step * step;
-    double width = two.g * step;
-    double widthSlope = 2 * two.slope * step * step;
-    double pull = kappa * reach;
-    double pullSlope = reach + kappa * reachSlope;
-    // Mean residual without drift; the drift takes it away but for the first rate's pull on m.
-    double gap = even.meanChange + pull * even.mean;
-    double first = stationary ? 2 / kappa : 0;
-    double m = n * gap * reach / width / (first + n * reach * reach / width);
-    double off = gap - m * reach;
-    double offSlope = pullSlope * even.mean - m * reachSlope;
-    double sum = even.changes + 2 * pull * even.cross + pull * pull * even.square + n * off * off;
-    double sumSlope = 2 * pullSlope * (even.cross + pull * even.square) + 2 * n * off * offSlope;
-    double squares = first * m * m + sum / width;
-    double squaresSlope =
-        (stationary ? -2 * m * m / (kappa * kappa) : 0)
-            + (sumSlope - sum * widthSlope / width) / width;
-    double logs = n * Math.log(width) - (stationary ? Math.log(2 * kappa) : 0);
-    double logsSlope = n * widthSlope / width - (stationary ? 1 / kappa : 0);
     int terms = terms();
     driftAtFirst = m;
     variance = squares / terms;
@@ -165,11 +114,12 @@ final class ExactLikelihood {
   double logLikelihood(double kappa, double theta) {
     double squares = 0;
     double logs = 0;
-    for (int i = 0; i < steps.length; i++) {
-      double w = Decay.at(2 * kappa * steps[i]).g * steps[i];
-      double e = x[i + 1] - x[i] - Math.expm1(-kappa * steps[i]) * (x[i] - theta);
-      squares += e * e / w;
-      logs += Math.log(w);
+    for (StepSums group : sums) {
+      double w = Decay.at(2 * kappa * group.step).g * group.step;
+      double pull = -Math.expm1(-kappa * group.step);
+      double off = group.meanChange + pull * (group.mean + x[0] - theta);
+      squares += (group.squares(pull) + group.n * off * off) / w;
+      logs += group.n * Math.log(w);
     }
     int n = steps.length;
     return -0.5 * (n * (Math.log(2 * Math.PI * squares / n) + 1) + logs);

@@ -15,11 +15,20 @@ public final class RateHistory {
   private final int missing;
   private final boolean regular;
 
+  /** Of uneven steps; null where they are even. */
+  private final StepGroups groups;
+
   private RateHistory(double[] times, double[] rates, int missing, boolean regular) {
+    this(times, rates, missing, regular, regular ? null : StepGroups.of(times));
+  }
+
+  private RateHistory(
+      double[] times, double[] rates, int missing, boolean regular, StepGroups groups) {
     this.times = times;
     this.rates = rates;
     this.missing = missing;
     this.regular = regular;
+    this.groups = groups;
   }
 
   /**
@@ -142,7 +151,16 @@ public final class RateHistory {
 
   /** The same times with other rates; for simulated histories. */
   RateHistory withRates(double[] other) {
-    return new RateHistory(times, other, missing, regular);
+    return new RateHistory(times, other, missing, regular, groups);
+  }
+
+  /** Different lengths among the steps; 1 where they are even. */
+  public int distinctSteps() {
+    return regular ? 1 : groups.count();
+  }
+
+  StepGroups groups() {
+    return groups;
   }
 
   double[] ratesInPlace() {

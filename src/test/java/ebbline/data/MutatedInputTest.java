@@ -55,9 +55,13 @@ class MutatedInputTest {
   }
 
   private void check(byte[] original, long seed, Reader reader) throws IOException {
+    check(original, seed, MUTATIONS, reader);
+  }
+
+  private void check(byte[] original, long seed, int mutations, Reader reader) throws IOException {
     Path file = folder.resolve("input");
     Random random = new Random(seed);
-    for (int i = 0; i < MUTATIONS; i++) {
+    for (int i = 0; i < mutations; i++) {
       byte[] bytes = mutated(original, random);
       Files.write(file, bytes);
       try {
@@ -121,16 +125,23 @@ class MutatedInputTest {
   void historiesSurvive() throws IOException {
     byte[] dated = Files.readAllBytes(Path.of("examples", "saltmere-rates.csv"));
     check(
-        Arrays.copyOf(dated, 900), 5, f -> HistoryFile.read(f, Optional.empty(), Optional.empty()));
+        Arrays.copyOf(dated, 900),
+        5,
+        MUTATIONS / 4,
+        f -> HistoryFile.read(f, Optional.empty(), Optional.empty()));
     byte[] bare =
         "# step: 1/250\nrate_pct,other\n3.1,4\n\"\",5\n-0.25,6\n3.4,7\n"
             .getBytes(StandardCharsets.UTF_8);
-    check(bare, 6, f -> HistoryFile.read(f, Optional.empty(), Optional.of("rate_pct")));
+    check(
+        bare,
+        6,
+        MUTATIONS / 4,
+        f -> HistoryFile.read(f, Optional.empty(), Optional.of("rate_pct")));
   }
 
   @Test
   void panelsSurvive() throws IOException {
     byte[] panel = Files.readAllBytes(Path.of("examples", "saltmere-panel.csv"));
-    check(Arrays.copyOf(panel, 1200), 7, f -> PanelFile.read(f, Optional.empty()));
+    check(Arrays.copyOf(panel, 1200), 7, MUTATIONS / 4, f -> PanelFile.read(f, Optional.empty()));
   }
 }

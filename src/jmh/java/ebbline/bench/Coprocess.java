@@ -37,6 +37,13 @@ public final class Coprocess {
     double swaptions = load.swaptionValues.length;
     kernels.put("swo", new Kernel(load::swaptions, swaptions, load.swaptionValues));
 
+    PathWork paths = new PathWork();
+    double steps = PathWork.PATHS * (double) PathWork.STEPS;
+    kernels.put("paths", new Kernel(() -> paths.plain(1), steps, new double[0]));
+    kernels.put("paths_t2", new Kernel(() -> paths.plain(2), steps, new double[0]));
+    kernels.put("paths_mirrored", new Kernel(paths::mirrored, steps, new double[0]));
+    kernels.put("paths_sobol", new Kernel(paths::sobol, steps, new double[0]));
+
     BufferedReader in =
         new BufferedReader(new InputStreamReader(System.in, StandardCharsets.US_ASCII));
     PrintWriter out = new PrintWriter(System.out, true, StandardCharsets.US_ASCII);

@@ -13,36 +13,45 @@ final class NormalQuantile {
 
   private NormalQuantile() {}
 
-  /** Relative error below 2e-15, p strictly between 0 and 1. */
-  static double at(double p) {
-    double q = p - 0.5;
-    if (Math.abs(q) <= CENTRE) {
-      return central(q);
+  /**
+   * Relative error below 2e-15.
+   *
+   * @param q probabilities less ½, strictly between −½ and ½
+   * @param out as long
+   */
+  static void at(double[] q, double[] out, int n) {
+    central(q, out, n);
+    for (int i = 0; i < n; i++) {
+      if (Math.abs(q[i]) > CENTRE) {
+        double r = Math.sqrt(-Math.log(0.5 - Math.abs(q[i])));
+        double x = r <= TAIL ? middle(r - 1.6) : far(r - TAIL);
+        out[i] = q[i] < 0 ? -x : x;
+      }
     }
-    double r = Math.sqrt(-Math.log(q < 0 ? p : 1 - p));
-    double x = r <= TAIL ? middle(r - 1.6) : far(r - TAIL);
-    return q < 0 ? -x : x;
   }
 
-  private static double central(double q) {
-    double r = CENTRE * CENTRE - q * q;
-    double top = 2509.0809287301227;
-    top = Math.fma(top, r, 33430.57558358813);
-    top = Math.fma(top, r, 67265.7709270087);
-    top = Math.fma(top, r, 45921.95393154987);
-    top = Math.fma(top, r, 13731.69376550946);
-    top = Math.fma(top, r, 1971.5909503065513);
-    top = Math.fma(top, r, 133.14166789178438);
-    top = Math.fma(top, r, 3.3871328727963665);
-    double bottom = 5226.495278852854;
-    bottom = Math.fma(bottom, r, 28729.085735721943);
-    bottom = Math.fma(bottom, r, 39307.89580009271);
-    bottom = Math.fma(bottom, r, 21213.794301586597);
-    bottom = Math.fma(bottom, r, 5394.196021424751);
-    bottom = Math.fma(bottom, r, 687.1870074920579);
-    bottom = Math.fma(bottom, r, 42.31333070160091);
-    bottom = Math.fma(bottom, r, 1);
-    return q * top / bottom;
+  /** For all, though it holds in the centre only: without a branch this is several times faster. */
+  private static void central(double[] q, double[] out, int n) {
+    for (int i = 0; i < n; i++) {
+      double r = CENTRE * CENTRE - q[i] * q[i];
+      double top = 2509.0809287301227;
+      top = Math.fma(top, r, 33430.57558358813);
+      top = Math.fma(top, r, 67265.7709270087);
+      top = Math.fma(top, r, 45921.95393154987);
+      top = Math.fma(top, r, 13731.69376550946);
+      top = Math.fma(top, r, 1971.5909503065513);
+      top = Math.fma(top, r, 133.14166789178438);
+      top = Math.fma(top, r, 3.3871328727963665);
+      double bottom = 5226.495278852854;
+      bottom = Math.fma(bottom, r, 28729.085735721943);
+      bottom = Math.fma(bottom, r, 39307.89580009271);
+      bottom = Math.fma(bottom, r, 21213.794301586597);
+      bottom = Math.fma(bottom, r, 5394.196021424751);
+      bottom = Math.fma(bottom, r, 687.1870074920579);
+      bottom = Math.fma(bottom, r, 42.31333070160091);
+      bottom = Math.fma(bottom, r, 1);
+      out[i] = q[i] * top / bottom;
+    }
   }
 
   private static double middle(double r) {

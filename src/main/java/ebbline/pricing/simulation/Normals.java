@@ -32,6 +32,7 @@ final class Normals {
     private final long seed;
     private final Ziggurat ziggurat;
     private final double[][] path;
+    private final double[] scratch;
     private int next;
 
     /**
@@ -44,6 +45,7 @@ final class Normals {
       seed = Mixing.mixed(sampling.seed() ^ 0x5deece66dL, batch);
       ziggurat = new Ziggurat(seed, first);
       path = new double[points.length == 0 ? 0 : steps + 1][most];
+      scratch = new double[most];
     }
 
     /**
@@ -53,7 +55,12 @@ final class Normals {
      * @param rest normals of the rest of the integral
      */
     void fill(double[][] state, double[][] rest, int count) {
-      if (points.length == 0) {
+      if (sampling.points() == Sampling.Points.PSEUDO_RANDOM) {
+        for (int k = 0; k < steps; k++) {
+          ziggurat.fill(state[k], count);
+          ziggurat.fill(rest[k], count);
+        }
+      } else if (points.length == 0) {
         mirrored(state, count);
         mirrored(rest, count);
       } else {
@@ -70,7 +77,7 @@ final class Normals {
     private void coordinate(int dimension, double[] out, int count) {
       SobolPoints mine = points[batch];
       if (dimension < mine.dimensions()) {
-        mine.normals(dimension, next, SobolPoints.shift(seed, dimension), out, count);
+        mine.normals(dimension, next, SobolPoints.shift(seed, dimension), out, scratch, count);
       } else {
         // Beyond the table's dimensions, where points say little anyway.
         ziggurat.fill(out, count);

@@ -22,7 +22,9 @@ public record Sampling(Points points, int paths, long seed, int threads) {
     /** Sobol points, a scramble and a digital shift of its own for each batch. */
     SOBOL,
     /** Pseudo-random normals, each path beside its mirror image. */
-    ANTITHETIC
+    ANTITHETIC,
+    /** Pseudo-random normals and nothing else, to compare with. */
+    PSEUDO_RANDOM
   }
 
   public Sampling {

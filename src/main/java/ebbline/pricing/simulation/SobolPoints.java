@@ -83,14 +83,19 @@ final class SobolPoints {
     return digits;
   }
 
-  /** The same coordinate of points {@code first} and after, shifted, as standard normals. */
-  void normals(int dimension, int first, long shift, double[] out, int count) {
+  /**
+   * The same coordinate of points {@code first} and after, shifted, as standard normals.
+   *
+   * @param scratch as long as {@code out}
+   */
+  void normals(int dimension, int first, long shift, double[] out, double[] scratch, int count) {
     long[] v = directions[dimension];
     long digits = digits(dimension, first) ^ shift;
     for (int i = 0; i < count; i++) {
-      out[i] = NormalQuantile.at((digits + 0.5) * 0x1p-52);
+      scratch[i] = (digits + 0.5) * 0x1p-52 - 0.5;
       digits ^= v[Integer.numberOfTrailingZeros(first + i + 1)];
     }
+    NormalQuantile.at(scratch, out, count);
   }
 
   /** A shift of all digits. */

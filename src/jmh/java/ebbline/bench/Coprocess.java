@@ -36,6 +36,10 @@ public final class Coprocess {
     kernels.put("cbo_blocks", new Kernel(load::couponOptionsInBlocks, coupons, load.couponValues));
     double swaptions = load.swaptionValues.length;
     kernels.put("swo", new Kernel(load::swaptions, swaptions, load.swaptionValues));
+    CalibrationWorkload fits = new CalibrationWorkload(Path.of(arguments[0]));
+    kernels.put("cal", new Kernel(fits::calibrations, CalibrationWorkload.REPEATED, fits.found));
+    kernels.put("price", new Kernel(fits::prices, fits.priceCount(), fits.price));
+    kernels.put("gradient", new Kernel(fits::gradients, fits.priceCount(), fits.price));
 
     PathWork paths = new PathWork();
     double steps = PathWork.PATHS * (double) PathWork.STEPS;

@@ -8,7 +8,10 @@ import ebbline.model.GaussianRates;
 import ebbline.model.VolatilitySteps;
 import java.util.Optional;
 
-/** Closed forms under Hull–White on the curves that the sources list. */
+/**
+ * Closed forms under Hull–White on the curves that the sources list, the model calibrated to its
+ * own options first.
+ */
 final class HullWhiteCases implements ShortRateCases.Computation {
   private static final double DAYS_PER_YEAR = 365;
 
@@ -42,7 +45,7 @@ final class HullWhiteCases implements ShortRateCases.Computation {
   private static CaseResult zeroPut(PublishedCase c, CaseInputs in) {
     double value =
         VasicekCases.option(
-            rates(in, listedCurve(in)),
+            CalibratedModel.of(rates(in, listedCurve(in))),
             -1,
             in.number("T_days") / DAYS_PER_YEAR,
             in.number("S_days") / DAYS_PER_YEAR,
@@ -53,7 +56,8 @@ final class HullWhiteCases implements ShortRateCases.Computation {
 
   private static CaseResult flatCurveCall(PublishedCase c, CaseInputs in) {
     double rate = -Math.log(Compounding.SEMI_ANNUAL.discount(in.number("flat_semiannual"), 1));
-    Decomposition parts = Decomposition.ofDatedFlows(rates(in, FlatCurve.of(rate)), in);
+    GaussianRates calibrated = CalibratedModel.of(rates(in, FlatCurve.of(rate)));
+    Decomposition parts = Decomposition.ofDatedFlows(calibrated, in);
     return CaseResult.of(c, "call on the coupon bond", parts.bondOption(1));
   }
 
@@ -68,7 +72,8 @@ final class HullWhiteCases implements ShortRateCases.Computation {
     for (int i = 0; i < times.length; i++) {
       logs[i] *= -times[i];
     }
-    GaussianRates rates = rates(in, InterpolatedCurve.of(Interpolation.LOG_LINEAR, times, logs));
+    GaussianRates rates =
+        CalibratedModel.of(rates(in, InterpolatedCurve.of(Interpolation.LOG_LINEAR, times, logs)));
     Decomposition parts = Decomposition.ofDatedFlows(rates, in);
     double step = 0.5;
     double expiry = in.number("T");

@@ -38,6 +38,10 @@ public final class RowPricer implements BookPricer {
       double deviation = market.fitted().get().deviation(row.instrument(), claim, market);
       figures.put(PriceFigure.PARAMETER_SD, deviation * Math.abs(scale));
     }
+    if (!claim.isCertain()) {
+      VolatilityTerms.impliedBy(claim, market.curve(), value.presentValue())
+          .ifPresent(vol -> figures.put(PriceFigure.IMPLIED_VOL, vol));
+    }
     String message = "";
     if (row.instrument() instanceof Swap swap) {
       figures.put(PriceFigure.PAR_RATE, ParRate.of(swap, market));

@@ -10,6 +10,7 @@ import ebbline.instrument.Right;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * What turns a quoted volatility of an option into its premium and back: for each period or right a
@@ -45,6 +46,30 @@ public final class VolatilityTerms {
    */
   public double most() {
     return most;
+  }
+
+  /**
+   * The volatility that a value implies: normal for an option on rates, Black's for one on a bond.
+   * Empty for other claims, and where the value holds none.
+   *
+   * @param value per 100 face
+   */
+  static Optional<Double> impliedBy(Claim claim, DiscountCurve curve, double value) {
+    boolean plain =
+        claim.flows().isEmpty()
+            && claim.rights().size() <= 1
+            && claim.rights().stream().allMatch(r -> r.strike().isPresent());
+    if (!plain) {
+      return Optional.empty();
+    }
+    try {
+      VolatilityTerms terms = of(claim, curve);
+      VolatilityLaw law = terms.onRates ? VolatilityLaw.NORMAL : VolatilityLaw.BLACK;
+      double vol = terms.lastExpiry() > 0 ? terms.implied(law, value, 0) : 0;
+      return vol > 0 ? Optional.of(vol) : Optional.empty();
+    } catch (IllegalArgumentException e) {
+      return Optional.empty(); // at its intrinsic value or its bound no volatility shows
+    }
   }
 
   /** Whether the forward is a rate, or a price per 100. */

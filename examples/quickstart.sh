@@ -49,6 +49,10 @@ echo "== Callable, putable and Bermudan rows under it"
 ebbline price --model "$models/fitted.json" --book examples/callables.csv
 
 echo
+echo "== The same rows challenged: induction, tree and simulation against each other"
+ebbline challenge --model "$models/fitted.json" --book examples/callables.csv --paths 4096
+
+echo
 echo "== The book under Vasicek"
 ebbline price --model "$models/vasicek.json" --book examples/book.csv
 

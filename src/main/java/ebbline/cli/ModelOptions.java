@@ -23,7 +23,7 @@ final class ModelOptions {
   @Option(
       names = "--model",
       paramLabel = "FILE|vasicek|hull-white",
-      description = "a model file of calibrate, or a model named with its parameters below")
+      description = "a model file of calibrate or estimate, or a name with its parameters below")
   private String model;
 
   @Option(
@@ -156,8 +156,8 @@ final class ModelOptions {
               0,
               "",
               "historical",
-              "a model under the historical measure gives no prices; use one that calibrate"
-                  + " wrote"));
+              "a model under the historical measure gives no prices; use one of calibrate, or of"
+                  + " estimate with --curve"));
     }
     return read;
   }

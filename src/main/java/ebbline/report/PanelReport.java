@@ -30,19 +30,25 @@ public final class PanelReport {
             .count("observations", panel.size())
             .count("cells", panel.cells())
             .number("span_years", panel.span(), 4);
+    // A search that ended nowhere leaves means and price of risk where it happened to stop.
+    boolean lost = estimate instanceof PanelEstimate.Stopped && errors.meanReversion().isEmpty();
     figure(row, "mean_reversion", found.meanReversion(), errors.meanReversion(), confidence, true);
-    figure(row, "long_run_mean", found.longRunMean(), errors.longRunMean(), confidence, false);
+    if (!lost) {
+      figure(row, "long_run_mean", found.longRunMean(), errors.longRunMean(), confidence, false);
+    }
     figure(row, "volatility", found.volatility(), errors.volatility(), confidence, false);
-    figure(
-        row,
-        "market_price_of_risk",
-        found.marketPriceOfRisk(),
-        errors.marketPriceOfRisk(),
-        confidence,
-        true);
+    if (!lost) {
+      figure(
+          row,
+          "market_price_of_risk",
+          found.marketPriceOfRisk(),
+          errors.marketPriceOfRisk(),
+          confidence,
+          true);
+    }
     figure(row, "measurement_sd", found.measurementSd(), errors.measurementSd(), confidence, false);
     double halfLife = Math.log(2) / found.meanReversion();
-    if (halfLife < 1e12) {
+    if (!lost && halfLife < 1e12) {
       row.number("half_life", halfLife, 4);
       row.rate("stationary_sd", found.volatility() / Math.sqrt(2 * found.meanReversion()));
     }
@@ -50,11 +56,17 @@ public final class PanelReport {
     FilteredRates rates = best.rates();
     row.rate("last_rate", rates.rate(rates.size() - 1));
     row.rate("last_rate_sd", rates.sd(rates.size() - 1));
-    row.rate("risk_neutral_mean", found.pricingMean());
+    if (!lost) {
+      row.rate("risk_neutral_mean", found.pricingMean());
+    }
     row.count("iterations", best.iterations());
     row.flag("converged", estimate instanceof PanelEstimate.Converged);
     if (estimate instanceof PanelEstimate.Stopped stopped) {
-      row.text("status", "stopped").text("message", stopped.reason());
+      row.text("status", "stopped")
+          .text(
+              "message",
+              stopped.reason()
+                  + (lost ? "; the means and the price of risk are not identified" : ""));
     }
     List<ResultRow> maturities = new ArrayList<>();
     double[] years = panel.maturities();

@@ -69,4 +69,29 @@ class OddHistoriesOnTheCommandLineTest {
       }
     }
   }
+
+  @Test
+  void aPanelThatNeverMovesShowsNoPriceOfRisk() throws IOException {
+    StringBuilder panel = new StringBuilder("1Y,5Y,10Y\n");
+    for (int i = 0; i < 20; i++) {
+      panel.append("0.03,0.04,0.05\n");
+    }
+    Path file = folder.resolve("panel.csv");
+    Files.writeString(file, panel);
+    Path model = folder.resolve("model.json");
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    int status =
+        Ebbline.run(
+            new String[] {
+              "estimate", file.toString(), "--method=panel", "--step=1M", "--save=" + model
+            },
+            new PrintStream(out, true, StandardCharsets.UTF_8),
+            new PrintStream(new ByteArrayOutputStream(), true, StandardCharsets.UTF_8));
+    assertThat(status).isEqualTo(1);
+    assertThat(out.toString(StandardCharsets.UTF_8))
+        .contains("are not identified")
+        .doesNotContain("market_price_of_risk")
+        .doesNotContain("long_run_mean");
+    assertThat(model).doesNotExist();
+  }
 }

@@ -144,7 +144,8 @@ final class OptionQuoteRow {
     if (takesSide) {
       filled.put("kind", fits ? side : swap ? "payer" : "call");
     }
-    Optional<Tenor> tenor = row.has("tenor") ? quiet(row, "tenor", Tenor::parse) : Optional.empty();
+    Optional<Tenor> tenor =
+        row.has("tenor") ? quiet(row, "tenor", SwaptionRow::tenor) : Optional.empty();
     Optional<Moment> expiry = quiet(row, "expiry", Moment::parse);
     if (!swap && tenor.isPresent() && !row.has("maturity")) {
       boolean fromToday = kind.equals("cap") || kind.equals("floor");

@@ -28,7 +28,7 @@ final class SwaptionRow implements RowKind {
   @Override
   public Optional<Swaption> read(RowCells cells) {
     Optional<Moment> expiry = cells.requiredMoment("expiry");
-    Optional<Tenor> tenor = cells.required("tenor", Tenor::parse);
+    Optional<Tenor> tenor = cells.required("tenor", SwaptionRow::tenor);
     Optional<SwapSide> side = cells.required("kind", SwapSide::of);
     Optional<OptionalDouble> strike = cells.requiredRateStrike();
     int frequency = cells.frequency(2);
@@ -39,5 +39,16 @@ final class SwaptionRow implements RowKind {
         () ->
             new Swaption(
                 side.get(), expiry.get(), tenor.get(), frequency, conventions, strike.get()));
+  }
+
+  /** A tenor, or a bare number of years that makes whole months. */
+  static Tenor tenor(String text) {
+    if (text.matches("\\d{1,3}(\\.\\d{1,6})?")) {
+      double months = 12 * Double.parseDouble(text);
+      if (Math.abs(months - Math.rint(months)) < 1e-4) {
+        return new Tenor((int) Math.rint(months), 0);
+      }
+    }
+    return Tenor.parse(text);
   }
 }

@@ -44,11 +44,14 @@ final class KernelSolution {
   /** The curve at one speed, and the system it solves. */
   final class Solved {
     private final SmithWilsonCurve curve;
+    private final double[][] kernel;
     private final double[][] matrix;
     private final OrthogonalFactors factors;
 
-    private Solved(SmithWilsonCurve curve, double[][] matrix, OrthogonalFactors factors) {
+    private Solved(
+        SmithWilsonCurve curve, double[][] kernel, double[][] matrix, OrthogonalFactors factors) {
       this.curve = curve;
+      this.kernel = kernel;
       this.matrix = matrix;
       this.factors = factors;
     }
@@ -72,9 +75,9 @@ final class KernelSolution {
       return t -> {
         double[] byQuote = new double[moves.length];
         for (int k = 0; k < times.length; k++) {
-          double kernel = SmithWilsonCurve.kernel(t, times[k], curve.speed());
+          double value = Math.exp(-omega * t) * SmithWilsonCurve.kernel(t, times[k], curve.speed());
           for (int i = 0; i < moves.length; i++) {
-            byQuote[i] += Math.exp(-omega * t) * kernel * moves[i][k];
+            byQuote[i] += value * moves[i][k];
           }
         }
         return byQuote;
@@ -112,7 +115,7 @@ final class KernelSolution {
       double[] product = new double[vector.length];
       for (int i = 0; i < product.length; i++) {
         for (int j = 0; j < product.length; j++) {
-          product[i] += SmithWilsonCurve.kernel(times[i], times[j], curve.speed()) * vector[j];
+          product[i] += kernel[i][j] * vector[j];
         }
       }
       return product;
@@ -124,8 +127,9 @@ final class KernelSolution {
     int m = times.length;
     double[][] kernel = new double[m][m];
     for (int i = 0; i < m; i++) {
-      for (int j = 0; j < m; j++) {
+      for (int j = 0; j <= i; j++) {
         kernel[i][j] = SmithWilsonCurve.kernel(times[i], times[j], speed);
+        kernel[j][i] = kernel[i][j];
       }
     }
     double[][] half = product(scaled, kernel);
@@ -149,7 +153,10 @@ final class KernelSolution {
       }
     }
     return new Solved(
-        SmithWilsonCurve.ofWeights(times, weights, ultimateForward, speed), matrix, factors);
+        SmithWilsonCurve.ofWeights(times, weights, ultimateForward, speed),
+        kernel,
+        matrix,
+        factors);
   }
 
   private static double[][] product(double[][] left, double[][] right) {

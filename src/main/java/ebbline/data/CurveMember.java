@@ -5,6 +5,7 @@ import ebbline.curve.DiscountCurve;
 import ebbline.curve.FlatCurve;
 import ebbline.curve.InterpolatedCurve;
 import ebbline.curve.Interpolation;
+import ebbline.curve.SmithWilsonCurve;
 import ebbline.curve.SvenssonCurve;
 import ebbline.time.TimeAxis.TimeBasis;
 import java.io.IOException;
@@ -20,6 +21,8 @@ final class CurveMember {
           "nodes",
           "form",
           "day_count",
+          "ultimate_forward",
+          "speed",
           "rate",
           "beta0",
           "beta1",
@@ -27,6 +30,9 @@ final class CurveMember {
           "beta3",
           "tau1",
           "tau2");
+
+  private static final Set<String> NODE = Set.of("time", "discount");
+  private static final Set<String> KERNEL_NODE = Set.of("time", "discount", "kernel");
 
   private CurveMember() {}
 
@@ -85,14 +91,13 @@ final class CurveMember {
     } catch (IllegalArgumentException e) {
       throw name.wrong(e.getMessage());
     }
-    if (interpolation == Interpolation.SMITH_WILSON) {
-      throw name.wrong("a model file holds no smith-wilson curve");
-    }
+    boolean kernels = interpolation == Interpolation.SMITH_WILSON;
     List<JsonValue> nodes = value.member("nodes").items();
     double[] times = new double[nodes.size()];
     double[] logs = new double[nodes.size()];
+    double[] weights = new double[nodes.size()];
     for (int i = 0; i < times.length; i++) {
-      JsonValue node = nodes.get(i).knowing(Set.of("time", "discount"));
+      JsonValue node = nodes.get(i).knowing(kernels ? KERNEL_NODE : NODE);
       JsonValue time = node.member("time");
       JsonValue discount = node.member("discount");
       times[i] = time.number();
@@ -103,6 +108,15 @@ final class CurveMember {
         throw discount.wrong("a discount factor must be above 0");
       }
       logs[i] = DiscountDigits.log(discount.decimal());
+      weights[i] = kernels ? node.member("kernel").number() : 0;
+    }
+    if (kernels) {
+      // The weights are the curve; the discount factors beside them are for other readers.
+      return SmithWilsonCurve.ofWeights(
+          times,
+          weights,
+          value.member("ultimate_forward").number(),
+          value.member("speed").number());
     }
     return InterpolatedCurve.of(interpolation, times, logs);
   }
@@ -119,20 +133,14 @@ final class CurveMember {
       }
       json.writeNumberField("tau1", formula.taus()[0]);
       json.writeNumberField("tau2", formula.taus()[1]);
-    } else if (curve instanceof InterpolatedCurve interpolated) {
-      json.writeStringField("interpolation", interpolated.interpolation().label());
-      json.writeArrayFieldStart("nodes");
-      double[] times = interpolated.nodes();
-      double[] logs = interpolated.nodeLogDiscounts();
-      for (int i = 0; i < times.length; i++) {
-        json.writeStartObject();
-        json.writeNumberField("time", times[i]);
-        BigDecimal discount = DiscountDigits.discount(logs[i]);
-        json.writeFieldName("discount");
-        json.writeNumber(discount);
-        json.writeEndObject();
-      }
-      json.writeEndArray();
+    } else if (curve instanceof InterpolatedCurve nodes) {
+      json.writeStringField("interpolation", nodes.interpolation().label());
+      nodes(json, nodes.nodes(), nodes.nodeLogDiscounts(), new double[0]);
+    } else if (curve instanceof SmithWilsonCurve kernels) {
+      json.writeStringField("interpolation", Interpolation.SMITH_WILSON.label());
+      json.writeNumberField("ultimate_forward", kernels.ultimateForward());
+      json.writeNumberField("speed", kernels.speed());
+      nodes(json, kernels.nodes(), kernels.nodeLogDiscounts(), kernels.weights());
     } else {
       throw new IllegalStateException("no form for a curve of " + curve.getClass());
     }
@@ -140,5 +148,25 @@ final class CurveMember {
       json.writeStringField("day_count", basis.label());
     }
     json.writeEndObject();
+  }
+
+  /**
+   * @param weights of kernels, one a node, or none
+   */
+  private static void nodes(JsonGenerator json, double[] times, double[] logs, double[] weights)
+      throws IOException {
+    json.writeArrayFieldStart("nodes");
+    for (int i = 0; i < times.length; i++) {
+      json.writeStartObject();
+      json.writeNumberField("time", times[i]);
+      BigDecimal discount = DiscountDigits.discount(logs[i]);
+      json.writeFieldName("discount");
+      json.writeNumber(discount);
+      if (weights.length > 0) {
+        json.writeNumberField("kernel", weights[i]);
+      }
+      json.writeEndObject();
+    }
+    json.writeEndArray();
   }
 }

@@ -71,7 +71,8 @@ public final class CurveWriter {
         return date.toString();
       }
     }
-    return Double.toString(time);
+    String text = Double.toString(time);
+    return text.endsWith(".0") ? text.substring(0, text.length() - 2) : text;
   }
 
   private static void kernels(StringBuilder text, SmithWilsonCurve curve, TimeAxis axis) {

@@ -10,6 +10,8 @@ import ebbline.instrument.PriceRounding;
 import ebbline.instrument.QuoteTerms;
 import ebbline.instrument.YieldKind;
 import ebbline.time.DayCount;
+import ebbline.time.Frequency;
+import ebbline.time.InputProblem;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -72,8 +74,8 @@ final class QuoteRows {
   }
 
   /** The quote; empty where the row has problems, which it has collected. */
-  Optional<SheetQuote> read(CsvRow given, List<ebbline.time.InputProblem> problems) {
-    List<ebbline.time.InputProblem> own = new ArrayList<>();
+  Optional<SheetQuote> read(CsvRow given, List<InputProblem> problems) {
+    List<InputProblem> own = new ArrayList<>();
     CsvRow row = given.collecting(own);
     Optional<QuoteKind> kind = row.required("instrument", row.value("instrument", QuoteRows::kind));
     Optional<SheetQuote> quote = Optional.empty();
@@ -204,7 +206,7 @@ final class QuoteRows {
     }
     DayCount dayCount = row.value("day_count", DayCount::of).orElse(DayCount.ACT_360);
     if (kind == QuoteKind.OIS || kind == QuoteKind.SWAP) {
-      int frequency = row.value("frequency", ebbline.time.Frequency::parse).orElseThrow().perYear();
+      int frequency = row.value("frequency", Frequency::parse).orElse(Frequency.ANNUAL).perYear();
       boolean endOfMonth = row.value("eom", SheetTerms::yesOrNo).orElse(false);
       int lag = row.value("payment_lag", SheetTerms::days).orElse(0);
       QuoteSpan.Leg leg = span.leg(frequency, dayCount, endOfMonth, lag);

@@ -108,9 +108,7 @@ public final class QuoteReport {
     for (int i = 0; i < fit.form().taus(); i++) {
       row.number("tau" + (i + 1), fit.curve().taus()[i], 6);
     }
-    row.magnitude("sum_of_squares", fit.squares())
-        .magnitude("rmse", fit.rootMeanSquare())
-        .flag("converged", fit.isSound());
+    row.magnitude("sum_of_squares", fit.squares()).flag("converged", fit.isSound());
     if (!fit.isSound()) {
       return row.text("problem", fit.problem()).build();
     }

@@ -91,6 +91,19 @@ class MutatedInputTest {
   }
 
   @Test
+  void quoteSheetsSurvive() throws IOException {
+    check(
+        Files.readAllBytes(Path.of("curves", "saltmere-quotes.csv")),
+        5,
+        f -> QuotesFile.read(f, QuoteOverrides.none()));
+    check(
+        Files.readAllBytes(
+            Path.of("src", "test", "resources", "golden", "files", "quotes-years.csv")),
+        6,
+        f -> QuotesFile.read(f, QuoteOverrides.none()));
+  }
+
+  @Test
   void booksSurvive() throws IOException {
     check(
         Files.readAllBytes(Path.of("examples", "book.csv")),

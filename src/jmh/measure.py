@@ -19,7 +19,7 @@ home, classpath = os.path.abspath(sys.argv[2]), ":".join(map(os.path.abspath, sy
 rounds = int(sys.argv[4]) if len(sys.argv) > 4 else 9
 os.chdir(home)
 JAVA = "exec java -Xms1g -XX:+UseSerialGC -cp '%s' ebbline.bench.Coprocess data" % classpath
-C1, C2, C3 = "exec bin/k1.o3", "exec bin/k2.o3", "exec bin/k3.o3"
+C1, C2, C3, C4 = ("exec bin/k%d.o3" % k for k in (1, 2, 3, 4))
 WORK = [  # what, unit, C program, C kernel, ours, target ratio
     ("bonds, walk over nodes", "flow", C1, "pv_walk", "pv_walk", None),
     ("bonds, day table against the C walk", "flow", C1, "pv_walk", "pv_day", 0.25),
@@ -33,6 +33,8 @@ WORK = [  # what, unit, C program, C kernel, ours, target ratio
     ("coupon-bond option, 20 flows, in blocks", "option", C2, "cbo", "cbo_blocks", 0.5),
     ("swaption 10 x 10 semi-annual", "option", C2, "swo", "swo", 1.1),
     ("mean reversion and volatility from 100 swaptions", "calibration", C3, "cal", "cal", 1.0),
+    ("32 callable bonds of 20 to 60 dates, 1e-9 with its bound against 1e-7", "bond", C4, "tz40", "callable", 2),
+    ("32 callable bonds of 20 to 60 dates, 1e-9 with its bound against 1e-9", "bond", C4, "tz35", "callable", 2),
 ]
 
 
@@ -51,7 +53,7 @@ def difference(c, ckernel, java, jkernel):
         return max(abs(x - y) / max(1.0, abs(x)) for x, y in pairs)
 
 
-procs = {cmd: bench.Proc(cmd) for cmd in (C1, C2, C3, JAVA)}
+procs = {cmd: bench.Proc(cmd) for cmd in (C1, C2, C3, C4, JAVA)}
 print("| work | C, ns | ours, ns | ratio | spread of the ratio | target | largest difference |")
 print("| --- | --- | --- | --- | --- | --- | --- |")
 for what, unit, cmd, ckernel, jkernel, target in WORK:

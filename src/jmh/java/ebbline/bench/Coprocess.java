@@ -48,6 +48,9 @@ public final class Coprocess {
     kernels.put("paths_mirrored", new Kernel(paths::mirrored, steps, new double[0]));
     kernels.put("paths_sobol", new Kernel(paths::sobol, steps, new double[0]));
 
+    CallableWork callable = new CallableWork(Path.of(arguments[0], "call.txt"), load.curve);
+    kernels.put("callable", new Kernel(callable::price, callable.items, callable.values));
+
     BufferedReader in =
         new BufferedReader(new InputStreamReader(System.in, StandardCharsets.US_ASCII));
     PrintWriter out = new PrintWriter(System.out, true, StandardCharsets.US_ASCII);

@@ -2,7 +2,6 @@ package ebbline.check;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 
 /** The published cases of short-rate models, Black's formula, convexity and curves. */
@@ -17,14 +16,13 @@ final class ShortRateCases implements CaseFamily {
       List.of(
           new VasicekCases(),
           new HullWhiteCases(),
+          new TreeCases(),
+          new CallableCases(),
           new BlackCases(),
           new CurveCases(),
           new QuotedCurveCases(),
           new EstimationCases(),
           new NormalCases());
-
-  private static final Map<String, String> LATER =
-      Map.of("callable", "early exercise is not part of this version");
 
   @Override
   public List<CaseResult> run(List<PublishedCase> cases) {
@@ -43,7 +41,6 @@ final class ShortRateCases implements CaseFamily {
         return result.get();
       }
     }
-    String why = LATER.get(c.topic());
-    return CaseResult.notComputed(c, why == null ? "no method of this version gives it" : why);
+    return CaseResult.notComputed(c, "no method of this version gives it");
   }
 }

@@ -233,6 +233,9 @@ final class PriceCommand implements Callable<Integer> {
     ResultRow.Builder built = PriceReport.result(result, row.carried());
     if (explains && !result.hasFailed()) {
       FlowReport.explain(built, row, priced.orElseThrow());
+      if (method().equals(Optional.of(Method.TRINOMIAL))) {
+        TreeReport.explain(built, row, priced.orElseThrow(), steps, output.format());
+      }
     }
     return List.of(built.build());
   }

@@ -12,13 +12,16 @@ import ebbline.model.GaussianRates;
  * et al. 2003, J. Fin. Econ. 67.
  */
 public final class BackwardInduction {
-  private static final double FINE = 0.32;
-  private static final double COARSE = 0.42;
-  private static final double FINE_RANGE = 8;
-  private static final double COARSE_RANGE = 7.4;
+  private static final double FINE = 0.35;
+  private static final double COARSE = 0.45;
+  private static final double FINE_RANGE = 7.4;
+  private static final double COARSE_RANGE = 6.9;
 
-  /** Of the size of what is exchanged: rounding, and errors that both resolutions share. */
-  private static final double FLOOR = 1e-12;
+  /**
+   * Of the size of what is exchanged: rounding, which grows with the range of the bonds, and errors
+   * that both resolutions share.
+   */
+  private static final double FLOOR = 4e-12;
 
   private BackwardInduction() {}
 
@@ -50,14 +53,24 @@ public final class BackwardInduction {
       return new Valuation(0, Method.BACKWARD_INDUCTION, 0);
     }
     Decisions decisions = new Decisions(claim, rates);
-    double fine = new Induction(decisions, FINE, FINE_RANGE).value();
-    double coarse = new Induction(decisions, COARSE, COARSE_RANGE).value();
-    double bound = Math.abs(fine - coarse) + decisions.size() * (FLOOR + decisions.merged());
+    Induction.Hints hints = new Induction.Hints(decisions);
+    double fine = new Induction(decisions, FINE, FINE_RANGE, hints).value();
+    double coarse = new Induction(decisions, COARSE, COARSE_RANGE, hints).value();
+    double spread = 1 + decisions.mostLoading();
+    double floor = FLOOR * spread * spread + decisions.merged();
+    double bound = Math.abs(fine - coarse) + decisions.size() * floor;
     return new Valuation(fine + 0.0, Method.BACKWARD_INDUCTION, bound);
+  }
+
+  /** The value alone, by the finer run only: for searches and differences. */
+  static double presentValue(Claim claim, GaussianRates rates) {
+    return Discounting.value(claim.flows(), rates.curve()).presentValue()
+        + rightsValue(claim, rates, FINE, FINE_RANGE);
   }
 
   /** One run at a chosen resolution, for studies and tests. */
   static double rightsValue(Claim claim, GaussianRates rates, double spacing, double range) {
-    return new Induction(new Decisions(claim, rates), spacing, range).value();
+    Decisions decisions = new Decisions(claim, rates);
+    return new Induction(decisions, spacing, range, new Induction.Hints(decisions)).value();
   }
 }

@@ -17,6 +17,13 @@ public final class BestMethod {
         : BackwardInduction.value(claim, rates);
   }
 
+  /** The present value of {@link #value} without its bound, which takes most of half the time. */
+  static double presentValue(Claim claim, GaussianRates rates) {
+    return claim.isCertain() || ClosedForm.applies(claim)
+        ? value(claim, rates).presentValue()
+        : BackwardInduction.presentValue(claim, rates);
+  }
+
   /** What the claim's rights are worth to its holder, by the same choice. */
   public static Valuation rightsValue(Claim claim, GaussianRates rates) {
     return claim.rights().size() == 1

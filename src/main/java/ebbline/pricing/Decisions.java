@@ -37,6 +37,7 @@ final class Decisions {
   private final List<Date> dates = new ArrayList<>();
   private double size;
   private double merged;
+  private final int order;
 
   Decisions(Claim claim, GaussianRates rates) {
     this.rates = rates;
@@ -60,6 +61,15 @@ final class Decisions {
       } while (i < rights.size() && isStill(time, rights.get(i).decision()));
       dates.add(date(time, latest, group));
     }
+    order = SingleBoundary.order(claim);
+  }
+
+  /**
+   * 1 if holding on is worth more than any right at low rates and less at high ones, with one
+   * boundary between; −1 the other way round; 0 if nothing of the kind is known.
+   */
+  int order() {
+    return order;
   }
 
   private static double[] worth(CashFlows flows, DiscountCurve curve) {
@@ -123,6 +133,15 @@ final class Decisions {
   /** The largest sum of magnitudes that any right exchanges, as present value. */
   double size() {
     return size;
+  }
+
+  /** The most by which a bond's logarithm varies for a deviation of the state, at any date. */
+  double mostLoading() {
+    double most = 0;
+    for (Date date : dates) {
+      most = Math.max(most, date.low() + date.high());
+    }
+    return most;
   }
 
   /** The sum of squared deviations of the steps that were taken for none. */

@@ -6,6 +6,7 @@ import ebbline.pricing.Decisions.Exchange;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
 
 /** One run of the backward induction at one resolution. */
 final class Induction {
@@ -17,13 +18,12 @@ final class Induction {
    * that starts at its boundary. Nothing is interpolated and no integral crosses a kink. A date on which nobody exercises
    * drops out; one on which somebody always does leaves B alone.
    */
-  private static final int SCAN = 40;
-  private static final int MOST_STEPS = 100;
-  private static final int NEAR_MISS_STEPS = 40;
+  private static final int MOST_PHASES = 64;
 
   private final Decisions decisions;
   private final double spacing;
   private final double range;
+  private final Hints hints;
 
   private Date ahead;
   private Exchange base;
@@ -36,11 +36,25 @@ final class Induction {
   /**
    * @param spacing of the nodes in deviations of a step
    * @param range of the state in its deviations
+   * @param hints where an earlier run found the boundaries; this one leaves its own
    */
-  Induction(Decisions decisions, double spacing, double range) {
+  Induction(Decisions decisions, double spacing, double range, Hints hints) {
     this.decisions = decisions;
     this.spacing = spacing;
     this.range = range;
+    this.hints = hints;
+  }
+
+  /** Boundaries of one run, from which another begins its search. */
+  static final class Hints {
+    private final double[] roots;
+    private final double[] slopes;
+
+    Hints(Decisions decisions) {
+      roots = new double[decisions.dates().size()];
+      slopes = new double[roots.length];
+      Arrays.fill(roots, Double.NaN);
+    }
   }
 
   /** The present value of the rights to the holder. */
@@ -52,7 +66,7 @@ final class Induction {
         return certain(date);
       }
       lookAhead(date);
-      decide(date, i == 0 ? null : dates.get(i - 1));
+      decide(date, i, i == 0 ? null : dates.get(i - 1));
     }
     return today();
   }
@@ -94,7 +108,7 @@ final class Induction {
   }
 
   /** The choice {@code first} less the choice {@code second}; −1 holds, others are rights. */
-  private final class Gap {
+  private final class Gap implements DoubleUnaryOperator {
     private final DeflatedFlows.Seen flows;
     private final int sign;
 
@@ -105,7 +119,8 @@ final class Induction {
       sign = (first < 0 ? 1 : 0) - (second < 0 ? 1 : 0);
     }
 
-    double at(double u) {
+    @Override
+    public double applyAsDouble(double u) {
       double sum = 0;
       if (sign != 0) {
         for (HalfLine.Smoothed line : smoothed) {
@@ -132,7 +147,7 @@ final class Induction {
     }
   }
 
-  private void decide(Date date, Date before) {
+  private void decide(Date date, int index, Date before) {
     double low = -range - date.low();
     double high = range + date.high();
     int m = date.rights().size();
@@ -141,7 +156,7 @@ final class Induction {
     for (int p = 0; p < m; p++) {
       for (int q = p + 1; q <= m; q++) {
         gaps[p][q] = new Gap(date, q == m ? -1 : q, p);
-        cuts = joined(cuts, roots(gaps[p][q], low, high));
+        cuts = Boundaries.joined(cuts, roots(gaps[p][q], q == m, index, low, high));
       }
     }
     Arrays.sort(cuts);
@@ -176,8 +191,13 @@ final class Induction {
       double at = bounds.get(k);
       int count = (int) ((side > 0 ? high - at : at - low) / h) + 2 + 2 * HalfLine.GHOSTS;
       double from = at - side * h * HalfLine.GHOSTS;
-      double[] values = new Gap(date, far, near).values(count, from, side * h);
-      result.add(new HalfLine(at, side, h, values));
+      Gap gap = far < 0 ? gaps[near][m] : new Gap(date, far, near);
+      HalfLine line = new HalfLine(at, side, h, gap.values(count, from, side * h));
+      result.add(line);
+      if (choices.size() == 2 && m == 1) {
+        hints.roots[index] = at;
+        hints.slopes[index] = far < 0 ? line.slope() : -line.slope();
+      }
     }
     base = date.rights().get(choices.get(anchor));
     lines = result;
@@ -189,7 +209,7 @@ final class Induction {
     int m = date.rights().size();
     int choice = -1;
     for (int p = m - 1; p >= 0; p--) {
-      double gain = -gaps[p][choice < 0 ? m : choice].at(u);
+      double gain = -gaps[p][choice < 0 ? m : choice].applyAsDouble(u);
       boolean holder = date.rights().get(p).party() == Party.HOLDER;
       if (holder ? gain > 0 : gain < 0) {
         choice = p;
@@ -206,102 +226,54 @@ final class Induction {
     }
     limit = spacing * Math.min(limit, 1 / Math.max(1, loading));
     if (!lines.isEmpty()) {
-      // A step that falls on the nodes of the next date makes one convolution of the whole grid.
+      // A step that falls on the nodes of the next date, or divides them, makes one convolution of
+      // the whole grid.
       double matched = lines.get(0).spacing() / decay;
-      if (matched <= limit * (1 + 1e-12) && matched >= 0.5 * limit) {
-        return matched;
+      double phases = Math.ceil(matched / limit - 1e-12);
+      if (phases <= MOST_PHASES && matched >= 0.4 * limit) {
+        return matched / Math.max(1, phases);
       }
     }
     return 0.8 * limit;
   }
 
-  private static double[] joined(double[] a, double[] b) {
-    double[] all = Arrays.copyOf(a, a.length + b.length);
-    System.arraycopy(b, 0, all, a.length, b.length);
-    return all;
-  }
-
-  /** Changes of sign between points of a scan, and where the function nearly touches 0 between. */
-  private static double[] roots(Gap gap, double low, double high) {
-    double by = (high - low) / SCAN;
-    double[] f = gap.values(SCAN + 1, low, by);
-    double[] found = new double[0];
-    for (int k = 0; k < SCAN; k++) {
-      double a = low + k * by;
-      if (f[k] > 0 != f[k + 1] > 0) {
-        found = joined(found, new double[] {root(gap, a, f[k], a + by, f[k + 1])});
-      } else if (k + 2 <= SCAN
-          && f[k + 1] > 0 == f[k + 2] > 0
-          && Math.abs(f[k + 1]) < Math.abs(f[k])
-          && Math.abs(f[k + 1]) <= Math.abs(f[k + 2])) {
-        found = joined(found, between(gap, a, a + 2 * by, f[k], f[k + 2]));
+  private double[] roots(Gap gap, boolean holds, int index, double low, double high) {
+    int sign = decisions.order();
+    if (sign != 0 && holds) {
+      double guess = hints.roots[index];
+      double slope = hints.slopes[index];
+      boolean known = !Double.isNaN(guess);
+      if (!known) {
+        guess = index + 1 < hints.roots.length ? extrapolated(index) : 0;
+        slope = index + 1 < hints.roots.length ? hints.slopes[index + 1] : 0;
+      }
+      double root = Boundaries.near(gap, low, high, sign, guess, slope, known);
+      if (!Double.isNaN(root)) {
+        return new double[] {root};
       }
     }
-    return found;
+    int points = Boundaries.scanned();
+    double[] values = gap.values(points, low, (high - low) / (points - 1));
+    return Boundaries.all(gap, values, low, high);
   }
 
-  /** Two roots between points of one sign, if the least magnitude between them changes it. */
-  private static double[] between(Gap gap, double from, double to, double first, double last) {
-    double golden = 0.5 * (3 - Math.sqrt(5));
-    double sign = Math.signum(first);
-    double a = from;
-    double b = to;
-    double x = a + golden * (b - a);
-    double y = b - golden * (b - a);
-    double fx = sign * gap.at(x);
-    double fy = sign * gap.at(y);
-    for (int i = 0; i < NEAR_MISS_STEPS; i++) {
-      if (Math.min(fx, fy) < 0) {
-        double inside = fx < fy ? x : y;
-        double value = sign * Math.min(fx, fy);
-        return new double[] {
-          root(gap, from, first, inside, value), root(gap, inside, value, to, last)
-        };
-      }
-      if (fx < fy) {
-        b = y;
-        y = x;
-        fy = fx;
-        x = a + golden * (b - a);
-        fx = sign * gap.at(x);
-      } else {
-        a = x;
-        x = y;
-        fx = fy;
-        y = b - golden * (b - a);
-        fy = sign * gap.at(y);
-      }
+  /** The boundary as a line through those of the two dates after it. */
+  private double extrapolated(int index) {
+    double next = state(index + 1);
+    if (Double.isNaN(next)) {
+      return 0;
     }
-    return new double[0];
+    List<Date> dates = decisions.dates();
+    double here = next;
+    if (index + 2 < dates.size() && !Double.isNaN(hints.roots[index + 2])) {
+      double gone = dates.get(index + 1).time() - dates.get(index).time();
+      double span = dates.get(index + 2).time() - dates.get(index + 1).time();
+      here += (next - state(index + 2)) * Math.min(2, gone / span);
+    }
+    return here / dates.get(index).deviation();
   }
 
-  /** Regula falsi with halved weights (Illinois), kept in the bracket. */
-  private static double root(Gap gap, double from, double first, double to, double last) {
-    double a = from;
-    double fa = first;
-    double b = to;
-    double fb = last;
-    double x = a;
-    for (int i = 0; i < MOST_STEPS && Math.abs(b - a) > 1e-9; i++) {
-      double next = b - fb * (b - a) / (fb - fa);
-      if (!(next > Math.min(a, b) && next < Math.max(a, b))) {
-        next = 0.5 * (a + b);
-      }
-      double moved = Math.abs(next - x);
-      x = next;
-      double fx = gap.at(x);
-      if (fx == 0 || moved < 1e-8) {
-        return x;
-      }
-      if (fx > 0 != fb > 0) {
-        a = b;
-        fa = fb;
-      } else {
-        fa *= 0.5;
-      }
-      b = x;
-      fb = fx;
-    }
-    return 0.5 * (a + b);
+  private double state(int index) {
+    return hints.roots[index] * decisions.dates().get(index).deviation();
   }
 }

@@ -52,7 +52,12 @@ public record OptionAdjusted(Claim claim, GaussianRates rates) {
   }
 
   private double price(double spread) {
-    return dirtyPrice(spread).presentValue();
+    return price(at(spread, rates.volatility()));
+  }
+
+  private double price(GaussianRates shifted) {
+    double growth = Math.exp(-shifted.curve().logDiscount(claim.settlement()));
+    return BestMethod.presentValue(claim, shifted) * growth;
   }
 
   /**
@@ -138,9 +143,9 @@ public record OptionAdjusted(Claim claim, GaussianRates rates) {
       double up = kept + Math.max(SMALLEST_NUDGE, NUDGE * kept);
       double down = Math.max(0, kept - Math.max(SMALLEST_NUDGE, NUDGE * kept));
       values[i] = up;
-      double high = dirtyPrice(at(spread, VolatilitySteps.of(ends, values))).presentValue();
+      double high = price(at(spread, VolatilitySteps.of(ends, values)));
       values[i] = down;
-      double low = dirtyPrice(at(spread, VolatilitySteps.of(ends, values))).presentValue();
+      double low = price(at(spread, VolatilitySteps.of(ends, values)));
       values[i] = kept;
       vega[i] = (high - low) / (up - down) * BASIS_POINT;
     }

@@ -7,6 +7,7 @@ import ebbline.instrument.Right.Party;
 import ebbline.model.GaussianRates;
 import ebbline.model.StandardNormal;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Claims with rights on a {@link TrinomialTree} that ends with the last decision.
@@ -72,14 +73,28 @@ public final class TrinomialPricing {
     return size * (1e-10 + 2 * StandardNormal.upper(tree.reach(tree.steps()) * state / deviation));
   }
 
+  /**
+   * The tree that {@link #value} takes for a number of steps; empty if nothing is decided after
+   * today.
+   *
+   * @throws IllegalArgumentException as {@link TrinomialTree#of}
+   */
+  public static Optional<TrinomialTree> tree(Claim claim, GaussianRates rates, int steps) {
+    List<Right> rights = claim.rights();
+    double horizon = rights.isEmpty() ? 0 : rights.get(rights.size() - 1).decision();
+    return horizon > 0
+        ? Optional.of(TrinomialTree.of(rates, horizon, aligned(rights, horizon, steps)))
+        : Optional.empty();
+  }
+
   /** The value of the rights on one tree. */
   static double rightsValue(Claim claim, GaussianRates rates, int steps) {
     List<Right> rights = claim.rights();
-    double horizon = rights.get(rights.size() - 1).decision();
     int left = rights.size() - 1;
     double[] value = {0};
-    if (horizon > 0) {
-      TrinomialTree tree = TrinomialTree.of(rates, horizon, aligned(rights, horizon, steps));
+    Optional<TrinomialTree> grown = tree(claim, rates, steps);
+    if (grown.isPresent()) {
+      TrinomialTree tree = grown.get();
       double length = tree.stepLength();
       value = new double[2 * tree.reach(tree.steps()) + 1];
       for (int i = tree.steps(); i >= 0; i--) {

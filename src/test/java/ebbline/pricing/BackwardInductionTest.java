@@ -19,6 +19,7 @@ import ebbline.model.Vasicek;
 import ebbline.model.VolatilitySteps;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import java.util.SplittableRandom;
 import org.junit.jupiter.api.Test;
 
@@ -155,9 +156,11 @@ class BackwardInductionTest {
 
   @Test
   void theErrorBoundHoldsAgainstAFarFinerRun() {
+    // -Drights.cases=10000 for the whole set.
     SplittableRandom random = new SplittableRandom(99);
     double worst = 0;
-    for (int i = 0; i < 300; i++) {
+    int cases = Integer.getInteger("rights.cases", 300);
+    for (int i = 0; i < cases; i++) {
       RandomRights drawn = RandomRights.draw(random);
       if (drawn.claim().rights().isEmpty()) {
         continue;
@@ -169,6 +172,23 @@ class BackwardInductionTest {
       worst = Math.max(worst, error);
     }
     assertThat(worst).isBetween(1e-12, 1e-8);
+  }
+
+  @Test
+  void wildClaimsWhoseTangentsLeadAstrayFallBackToTheScan() {
+    // Cases of the set above in which bonds vary by e to the 5 and more a deviation.
+    SplittableRandom random = new SplittableRandom(99);
+    Set<Integer> wild = Set.of(620, 1301, 2687, 3506, 3671, 8461);
+    for (int i = 0; i <= 8461; i++) {
+      RandomRights drawn = RandomRights.draw(random);
+      if (wild.contains(i)) {
+        Valuation found = BackwardInduction.rightsValue(drawn.claim(), drawn.rates());
+        double fine = BackwardInduction.rightsValue(drawn.claim(), drawn.rates(), 0.2, 9);
+        assertThat(found.presentValue())
+            .as("seed 99, case %s", i)
+            .isCloseTo(fine, within(Math.min(1e-7, found.errorBound())));
+      }
+    }
   }
 
   @Test

@@ -32,9 +32,6 @@ final class BondCases implements CaseFamily {
   /** Why the cases whose id starts so are not computed. */
   private static final Map<String, String> REASONS =
       Map.of(
-          "CFR-IV-",
-              "the source's roundings on the way are not stated; its price to six decimals is the"
-                  + " case without '-rounded'",
           "CAL-US6103", "the calendar of the federal offices is not one of the program's",
           "CAL-ADJ", "this roll is not one of the program's",
           "CAL-IMM", "futures' dates are given to the program, not computed by it",

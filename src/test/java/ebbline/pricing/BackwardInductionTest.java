@@ -156,10 +156,10 @@ class BackwardInductionTest {
 
   @Test
   void theErrorBoundHoldsAgainstAFarFinerRun() {
-    // -Drights.cases=10000 for the whole set.
+    // The whole set takes a few seconds; -Drights.cases=N for another number.
     SplittableRandom random = new SplittableRandom(99);
     double worst = 0;
-    int cases = Integer.getInteger("rights.cases", 300);
+    int cases = Integer.getInteger("rights.cases", 10_500);
     for (int i = 0; i < cases; i++) {
       RandomRights drawn = RandomRights.draw(random);
       if (drawn.claim().rights().isEmpty()) {

@@ -5,7 +5,9 @@ import ebbline.instrument.CallableBond;
 import ebbline.instrument.Claim;
 import ebbline.instrument.PlacedLeg;
 import ebbline.instrument.Swap;
+import ebbline.time.TimeAxis;
 import java.util.EnumMap;
+import java.util.Locale;
 import java.util.Optional;
 
 /** Prices one row of a book, or says why it cannot. */
@@ -55,7 +57,26 @@ public final class RowPricer implements BookPricer {
     } else if (claim.isCertain()) {
       message = priceFigures(row, claim, value, figures);
     }
-    return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, message);
+    String beyond = beyondTheCurve(claim);
+    String both =
+        message.isEmpty() || beyond.isEmpty() ? message + beyond : message + "; " + beyond;
+    return PricedRow.of(row.id(), row.instrument().kind(), value.method(), figures, both);
+  }
+
+  /** A remark where the row's own payments lie beyond the last node. */
+  private String beyondTheCurve(Claim claim) {
+    double[] nodes = market.curve().nodes();
+    int n = claim.flows().size();
+    if (nodes.length == 0 || n == 0) {
+      return "";
+    }
+    double last = nodes[nodes.length - 1];
+    return claim.flows().time(n - 1) > last + TimeAxis.SAME_MOMENT
+        ? String.format(
+            Locale.ROOT,
+            "pays beyond the curve's last node at %.4g years, where it is extended",
+            last)
+        : "";
   }
 
   private String priceFigures(

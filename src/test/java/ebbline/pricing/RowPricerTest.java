@@ -4,6 +4,8 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import ebbline.curve.FlatCurve;
+import ebbline.curve.InterpolatedCurve;
+import ebbline.curve.Interpolation;
 import ebbline.instrument.Bond;
 import ebbline.instrument.BookRow;
 import ebbline.instrument.Instrument;
@@ -133,5 +135,18 @@ class RowPricerTest {
     PricedRow failed = new RowPricer(FLAT, PricingRequest.STANDARD).price(row(old, 100));
     assertThat(failed.hasFailed()).isTrue();
     assertThat(failed.message()).isEqualTo("maturity must lie after today, found -1.0");
+  }
+
+  @Test
+  void aPaymentBeyondTheCurveIsSaid() {
+    Market two =
+        Market.of(
+            TimeAxis.undated(),
+            InterpolatedCurve.of(
+                Interpolation.LOG_LINEAR, new double[] {1, 2}, new double[] {-0.05, -0.1}));
+    assertThat(new RowPricer(two, PricingRequest.STANDARD).price(row(BOND, 100)).message())
+        .isEqualTo("pays beyond the curve's last node at 2.000 years, where it is extended");
+    assertThat(new RowPricer(FLAT, PricingRequest.STANDARD).price(row(BOND, 100)).message())
+        .isEmpty();
   }
 }

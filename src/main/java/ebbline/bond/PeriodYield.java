@@ -104,11 +104,17 @@ public final class PeriodYield {
         next = Double.isInfinite(high) ? 2 * Math.abs(yield) + 1 : 0.5 * (low + high);
       }
       if (Math.abs(next - yield) <= 1e-15 * Math.max(1, Math.abs(yield)) || high - low < 1e-16) {
-        return next;
+        yield = next;
+        break;
       }
       yield = next;
     }
-    return yield;
+    if (yield > lowest()
+        && Double.isFinite(yield)
+        && Math.abs(at(yield).price() / price - 1) <= 1e-9) {
+      return yield;
+    }
+    throw new IllegalArgumentException("no yield gives the dirty price " + price);
   }
 
   /** −P′/P, years. */

@@ -5,6 +5,9 @@ final class YieldSolver {
   private static final int MOST_STEPS = 400;
   private static final double ACCURACY = 1e-15;
 
+  /** Rounding of a yield, as far as it moves the price of any real paper, stays below this. */
+  private static final double REPRICED = 1e-9;
+
   private YieldSolver() {}
 
   /**
@@ -34,12 +37,23 @@ final class YieldSolver {
       }
       double tolerance = ACCURACY * Math.max(1, Math.abs(yield));
       if (Math.abs(next - yield) <= tolerance || high - low <= tolerance) {
-        return next;
+        return checked(formula, next, price);
       }
       yield = next;
     }
     throw new IllegalArgumentException(
         "no yield was found for the dirty price " + price + " after " + MOST_STEPS + " steps");
+  }
+
+  /** Where the formula is too steep or too flat for doubles the bracket closes on no solution. */
+  private static double checked(YieldFormula formula, double yield, double price) {
+    if (yield > formula.lowest() && yield < formula.highest()) {
+      double found = formula.at(yield).price();
+      if (Math.abs(found / price - 1) <= REPRICED) {
+        return yield;
+      }
+    }
+    throw new IllegalArgumentException("no yield gives the dirty price " + price);
   }
 
   private static double between(double low, double high, double yield) {

@@ -190,4 +190,22 @@ class BondYieldTest {
             leg.yieldTerms(), new QuoteTerms(YieldKind.STREET, rule, PriceRounding.NONE))
         .price(0.04);
   }
+
+  @Test
+  void aPriceThatNoDoubleReachesIsRefusedInWords() {
+    PlacedLeg leg =
+        Bond.of(Moment.ofYears(9.7), 0.04, 2, DayCount.ACT_ACT_ICMA, 100, 0)
+            .leg()
+            .on(TimeAxis.undated());
+    for (YieldKind kind :
+        new YieldKind[] {
+          YieldKind.STREET, YieldKind.TREASURY, YieldKind.SIMPLE, YieldKind.ANNUAL
+        }) {
+      assertThatThrownBy(() -> kind(leg, kind).yieldOf(1e300)).hasMessageContaining("no yield");
+      BondYield bond = kind(leg, kind);
+      assertThat(bond.price(bond.yieldOf(1e4))).isCloseTo(1e4, within(1e-6));
+    }
+    assertThatThrownBy(() -> kind(leg, YieldKind.STREET).yieldOf(1e-300))
+        .hasMessageContaining("no yield");
+  }
 }
